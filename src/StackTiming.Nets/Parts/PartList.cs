@@ -1,0 +1,16 @@
+using System.Collections.Immutable;
+
+namespace StackTiming.Nets.Parts;
+
+/// <summary>The parts of a board and the buffer models that their pins use.</summary>
+/// <param name="Models">Buffer models by name.</param>
+/// <param name="Parts">Parts by reference designator.</param>
+public sealed record PartList(ImmutableDictionary<string, BufferModel> Models, ImmutableDictionary<string, Part> Parts)
+{
+    /// <summary>No parts.</summary>
+    public static PartList Empty { get; } = new(ImmutableDictionary<string, BufferModel>.Empty, ImmutableDictionary<string, Part>.Empty);
+
+    /// <summary>The part of that name, or null.</summary>
+    /// <param name="name">Reference designator.</param>
+    public Part? Find(string name) => Parts.GetValueOrDefault(name);
+}
