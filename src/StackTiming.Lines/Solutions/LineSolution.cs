@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using StackTiming.Lines.Constants;
 
 namespace StackTiming.Lines.Solutions;
 
@@ -28,11 +29,8 @@ public sealed record LineSolution(
     public double Z0Ohms => Math.Sqrt(L11 / C11);
 
     /// <summary>Effective permittivity of a single signal.</summary>
-    public double EpsEff => L11 * C11 * SpeedOfLight * SpeedOfLight;
+    public double EpsEff => L11 * C11 * Vacuum.SpeedOfLight * Vacuum.SpeedOfLight;
 
     /// <summary>Delay of a single signal, seconds per metre.</summary>
     public double DelaySecondsPerMetre => Math.Sqrt(L11 * C11);
-
-    /// <summary>Speed of light in vacuum, m/s (exact by the definition of the metre).</summary>
-    public const double SpeedOfLight = 299_792_458.0;
 }
