@@ -8,25 +8,29 @@ namespace StackTiming.Nets.Lengths;
 /// </summary>
 public sealed class LengthList
 {
-    private readonly Segment[] segments;
+    private readonly ReadOnlyMemory<Segment> segments;
     private readonly Dictionary<string, int> indices;
 
     /// <summary>Makes a list from nets and segments that belong together.</summary>
     /// <param name="files">Paths of the files that the segments come from.</param>
     /// <param name="nets">The nets; names are unique, <see cref="Net.Index"/> counts from 0.</param>
     /// <param name="segments">The segments, those of each net consecutive.</param>
-    public LengthList(ImmutableArray<string> files, ImmutableArray<Net> nets, Segment[] segments)
+    public LengthList(ImmutableArray<string> files, ImmutableArray<Net> nets, ReadOnlyMemory<Segment> segments)
+        : this(files, nets, segments, nets.ToDictionary(n => n.Name, n => n.Index, StringComparer.Ordinal))
+    {
+    }
+
+    internal LengthList(
+        ImmutableArray<string> files, ImmutableArray<Net> nets, ReadOnlyMemory<Segment> segments, Dictionary<string, int> indices)
     {
         Files = files;
         Nets = nets;
         this.segments = segments;
-        indices = new Dictionary<string, int>(nets.Length, StringComparer.Ordinal);
-        foreach (var net in nets)
-            indices.Add(net.Name, net.Index);
+        this.indices = indices;
     }
 
     /// <summary>A list without nets.</summary>
-    public static LengthList Empty { get; } = new([], [], []);
+    public static LengthList Empty { get; } = new([], [], ReadOnlyMemory<Segment>.Empty);
 
     /// <summary>Paths of the files that the list was read from.</summary>
     public ImmutableArray<string> Files { get; }
@@ -35,11 +39,11 @@ public sealed class LengthList
     public ImmutableArray<Net> Nets { get; }
 
     /// <summary>All segments, those of each net consecutive and in file order.</summary>
-    public ReadOnlySpan<Segment> Segments => segments;
+    public ReadOnlySpan<Segment> Segments => segments.Span;
 
     /// <summary>The segments of a net in file order.</summary>
     /// <param name="net">A net of this list.</param>
-    public ReadOnlySpan<Segment> SegmentsOf(Net net) => segments.AsSpan(net.FirstSegment, net.SegmentCount);
+    public ReadOnlySpan<Segment> SegmentsOf(Net net) => segments.Span.Slice(net.FirstSegment, net.SegmentCount);
 
     /// <summary>The net of that name.</summary>
     /// <param name="name">Its name, in the letters of the file.</param>

@@ -1,11 +1,13 @@
 namespace StackTiming.Nets.Lengths;
 
 /// <summary>
-/// One row of a length list. A board has up to millions of them, so this is a plain value; its names are shared strings, one
+/// One row of a length list. A board has up to millions of them, so this is a small plain value; its names are shared strings, one
 /// object per distinct text in a list. A length of 0 stands for "not stated" wherever the row may leave it out.
 /// </summary>
 public readonly record struct Segment
 {
+    private readonly SegmentDetails? details;
+
     /// <summary>Where it starts: a pin (<c>U1.A3</c>), a branch label (<c>*1</c>), or empty.</summary>
     public required string From { get; init; }
 
@@ -16,10 +18,14 @@ public readonly record struct Segment
     public required string Layer { get; init; }
 
     /// <summary>The layer at which a via's signal leaves it; empty for a trace.</summary>
-    public string ToLayer { get; init; }
+    public required string ToLayer { get; init; }
 
-    /// <summary>Net that runs beside this trace without being its pair, or empty.</summary>
-    public string Neighbour { get; init; }
+    /// <summary>Meander, neighbour and hole; <see cref="SegmentDetails.None"/> where the row states none of them.</summary>
+    public SegmentDetails Details
+    {
+        get => details ?? SegmentDetails.None;
+        init => details = value;
+    }
 
     /// <summary>Routed length of a trace in metres; 0 for a via, whose height follows from the stack-up.</summary>
     public double LengthMetres { get; init; }
@@ -29,27 +35,6 @@ public readonly record struct Segment
 
     /// <summary>Spacing to the other member of the pair in metres; 0 where the trace runs alone.</summary>
     public double GapMetres { get; init; }
-
-    /// <summary>Space between the legs of a meander in metres; 0 where there is none.</summary>
-    public double MeanderGapMetres { get; init; }
-
-    /// <summary>Length of one leg of a meander in metres; 0 where there is none.</summary>
-    public double MeanderLegMetres { get; init; }
-
-    /// <summary>Spacing to <see cref="Neighbour"/> in metres; 0 where not stated.</summary>
-    public double NeighbourGapMetres { get; init; }
-
-    /// <summary>Length beside <see cref="Neighbour"/> in metres; 0 where not stated.</summary>
-    public double NeighbourLengthMetres { get; init; }
-
-    /// <summary>Finished or drilled hole diameter of a via in metres; 0 where not stated.</summary>
-    public double DrillMetres { get; init; }
-
-    /// <summary>Pad diameter of a via in metres; 0 where not stated.</summary>
-    public double PadMetres { get; init; }
-
-    /// <summary>Diameter of the clearance in the planes around a via in metres; 0 where not stated.</summary>
-    public double AntipadMetres { get; init; }
 
     /// <summary>Line of the row in its file, from 1.</summary>
     public required int Line { get; init; }
@@ -61,5 +46,5 @@ public readonly record struct Segment
     public required SegmentKind Kind { get; init; }
 
     /// <summary>True for a trace that meanders.</summary>
-    public bool Meanders => MeanderGapMetres > 0;
+    public bool Meanders => Details.MeanderGapMetres > 0;
 }
