@@ -61,13 +61,17 @@ public static class LengthListReader
     {
         LengthRows? rows = null;
         var count = 0;
+        // The library numbers the first row of a file without a header of its own as if a header stood before it.
+        var firstLine = 1;
         foreach (var row in reader)
         {
+            var line = (firstLine > 0 ? firstLine : row.LineNumberFrom) + format.SkipLines;
+            firstLine = 0;
             if (row.ColCount <= 1 && row.Span.IsWhiteSpace())
                 continue;
             if (rows is null)
             {
-                var at = new FilePosition(file.Path, row.LineNumberFrom + format.SkipLines, 0);
+                var at = new FilePosition(file.Path, line, 0);
                 var cells = HeaderCells(row, at);
                 rows = new LengthRows(HeaderRow.Read(cells, format, at, problems), at, format, builder, layers, problems);
                 continue;

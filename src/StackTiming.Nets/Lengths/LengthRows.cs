@@ -259,8 +259,9 @@ internal sealed class LengthRows
             problems.Error(
                 cells.PositionOf(row, LengthColumn.Kind), $"'kind' cannot be '{Suggestion.Shorten(text.ToString())}'",
                 Suggestion.For(text.ToString(), ["trace", "via"]));
+            return layer.Second.Length > 0 ? SegmentKind.Via : SegmentKind.Trace;
         }
-        else if (layer.Second.Length > 0)
+        if (layer.Second.Length > 0)
             problems.Error(cells.PositionOf(row, LengthColumn.Kind), "a trace lies on one layer, but 'layer' names two", "write via in 'kind', or one layer");
         return SegmentKind.Trace;
     }
