@@ -1,6 +1,7 @@
 using System.Collections.Immutable;
 using System.Globalization;
 using MathNet.Numerics.LinearAlgebra;
+using StackTiming.Lines.Constants;
 using StackTiming.Lines.Fields.Geometry;
 using StackTiming.Lines.Fields.Kernels;
 using StackTiming.Lines.Fields.Panels;
@@ -26,7 +27,7 @@ namespace StackTiming.Lines.Fields;
 /// coarser of the two, so the result is better than it says.
 /// </para>
 /// </summary>
-public static class FieldSolver
+public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
 {
     /// <summary>Id of the method.</summary>
     public const string MethodId = "field-solver";
@@ -36,11 +37,43 @@ public static class FieldSolver
         new(1.7, 2, 4, 6), new(1.7, 2.5, 5, 8), new(1.7, 3, 6, 10), new(1.7, 4, 8, 14), new(2, 5, 10, 18), new(2.2, 7, 14, PanelIntegral.MaxTerms),
     ];
 
+    /// <summary>The solver with <see cref="FieldSolverOptions.Default"/>.</summary>
+    public static FieldSolver Default { get; } = new(FieldSolverOptions.Default);
+
+    /// <inheritdoc/>
+    public string Name => "field solver";
+
+    /// <inheritdoc/>
+    public LineSolution? Calculate(CrossSection section)
+    {
+        try
+        {
+            return Solve(section).Line;
+        }
+        catch (SectionNotSolvableException)
+        {
+            return null;
+        }
+    }
+
+    /// <inheritdoc/>
+    public string? Objection(CrossSection section)
+    {
+        try
+        {
+            Solve(section);
+            return null;
+        }
+        catch (SectionNotSolvableException e)
+        {
+            return e.Message.TrimEnd('.');
+        }
+    }
+
     /// <summary>Solves a section to the tolerance.</summary>
     /// <exception cref="SectionNotSolvableException">The section has no solution or is too fine to be followed; the message says where.</exception>
-    public static FieldSolution Solve(CrossSection section, FieldSolverOptions? options = null)
+    public FieldSolution Solve(CrossSection section)
     {
-        var wanted = options ?? FieldSolverOptions.Default;
         SectionChecks.Check(section);
         var tolerance = SectionChecks.Tolerance(section);
         var frame = SectionFrame.Of(section, tolerance);
@@ -57,15 +90,15 @@ public static class FieldSolver
             if (coarse is not null)
                 error = Math.Max(Difference(fine.FilledCapacitance, coarse.FilledCapacitance), Difference(inductance, coarseInductance));
             (coarse, coarseInductance) = (fine, inductance);
-            if (error <= wanted.RelativeTolerance)
+            if (error <= options.RelativeTolerance)
                 break;
         }
 
-        return Result(section, frame, surfaces, pairs, coarse!, inductance, error, wanted);
+        return Result(section, frame, surfaces, pairs, coarse!, inductance, error);
     }
 
-    private static FieldSolution Result(
-        CrossSection section, SectionFrame frame, SectionSurfaces surfaces, ConductorPairs pairs, SolvedMesh mesh, double[,] inductance, double error, FieldSolverOptions wanted)
+    private FieldSolution Result(
+        CrossSection section, SectionFrame frame, SectionSurfaces surfaces, ConductorPairs pairs, SolvedMesh mesh, double[,] inductance, double error)
     {
         foreach (var value in mesh.FilledCapacitance.Cast<double>().Concat(inductance.Cast<double>()).Append(error))
         {
@@ -73,9 +106,9 @@ public static class FieldSolver
                 throw new SectionNotSolvableException("The equations of the cross-section have no finite solution; its dimensions may be too far apart.");
         }
 
-        ImmutableArray<string> warnings = error <= wanted.RelativeTolerance
+        ImmutableArray<string> warnings = error <= options.RelativeTolerance
             ? []
-            : [string.Create(CultureInfo.InvariantCulture, $"The field solver stopped at an estimated error of {error:P2}; {wanted.RelativeTolerance:P2} was asked for.")];
+            : [string.Create(CultureInfo.InvariantCulture, $"The field solver stopped at an estimated error of {error:P2}; {options.RelativeTolerance:P2} was asked for.")];
         var shares = EnergyPicture.Shares(mesh, pairs, surfaces.Regions.Media, EnergyPicture.StandardDrive(pairs.Signals));
         var line = new LineSolution(
             [.. section.Signals.Select(c => c.Name)], MethodId, mesh.FilledCapacitance, inductance, shares, error, warnings);
@@ -85,7 +118,7 @@ public static class FieldSolver
     private static double[,] Inductance(double[,] emptyCapacitance)
     {
         var inverse = Matrix<double>.Build.DenseOfArray(emptyCapacitance).Inverse();
-        var scale = 1 / (LineSolution.SpeedOfLight * LineSolution.SpeedOfLight);
+        const double scale = Vacuum.Mu0 * Vacuum.Epsilon0;
         return (inverse * scale).ToArray();
     }
 

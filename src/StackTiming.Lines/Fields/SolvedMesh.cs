@@ -1,3 +1,4 @@
+using StackTiming.Lines.Constants;
 using StackTiming.Lines.Fields.Geometry;
 using StackTiming.Lines.Fields.Kernels;
 using StackTiming.Lines.Fields.Panels;
@@ -9,9 +10,6 @@ namespace StackTiming.Lines.Fields;
 /// <summary>One section solved on one mesh, with its dielectrics and in air.</summary>
 internal sealed class SolvedMesh
 {
-    /// <summary>Permittivity of vacuum, F/m (CODATA 2018).</summary>
-    public const double Epsilon0 = 8.8541878128e-12;
-
     private readonly ConductorPairs pairs;
 
     /// <summary>Solves the surfaces of a section that is in the solver's frame.</summary>
@@ -61,7 +59,7 @@ internal sealed class SolvedMesh
         for (var i = 0; i < pairs.Signals; i++)
         {
             for (var j = 0; j <= i; j++)
-                matrix[i, j] = matrix[j, i] = Math.PI * Epsilon0 * (matrix[i, j] + matrix[j, i]);
+                matrix[i, j] = matrix[j, i] = Math.PI * Vacuum.Epsilon0 * (matrix[i, j] + matrix[j, i]);
         }
 
         return matrix;

@@ -1,3 +1,4 @@
+using StackTiming.Lines.Constants;
 using StackTiming.Lines.Fields;
 using StackTiming.Lines.Solutions;
 using Xunit;
@@ -32,8 +33,8 @@ public sealed class FieldSolverReferenceTests
         var reference = ReferenceSections.Named(name);
         foreach (var tolerance in new[] { 1e-2, 1e-3, 1e-4, 1e-6 })
         {
-            var line = FieldSolver.Solve(reference.Section, new FieldSolverOptions(tolerance)).Line;
-            // 1e-8: the references' permeability of vacuum is 4e-7 pi, and the wide grounds of the coplanar cases end somewhere.
+            var line = new FieldSolver(new FieldSolverOptions(tolerance)).Solve(reference.Section).Line;
+            // 3e-8: the wide grounds that stand for infinite ones in the coplanar cases end somewhere.
             Assert.True(MatrixErrors.Largest(line.CapacitanceFaradPerMetre, reference.Capacitance) <= line.RelativeError + 3e-8);
             Assert.True(MatrixErrors.Largest(line.InductanceHenryPerMetre, reference.Inductance) <= line.RelativeError + 3e-8);
             Assert.True(line.RelativeError <= tolerance);
@@ -46,8 +47,8 @@ public sealed class FieldSolverReferenceTests
     {
         foreach (var reference in ReferenceSections.FiniteElement)
         {
-            var line = FieldSolver.Solve(reference.Section).Line;
-            var converged = FieldSolver.Solve(reference.Section, new FieldSolverOptions(5e-6)).Line;
+            var line = FieldSolver.Default.Solve(reference.Section).Line;
+            var converged = new FieldSolver(new FieldSolverOptions(5e-6)).Solve(reference.Section).Line;
             Assert.True(MatrixErrors.Largest(line.CapacitanceFaradPerMetre, converged.CapacitanceFaradPerMetre) <= line.RelativeError, reference.Name);
             Assert.True(MatrixErrors.Largest(line.InductanceHenryPerMetre, converged.InductanceHenryPerMetre) <= line.RelativeError, reference.Name);
         }
@@ -55,7 +56,7 @@ public sealed class FieldSolverReferenceTests
 
     private static void Check(ReferenceSection reference, double bound)
     {
-        var line = FieldSolver.Solve(reference.Section).Line;
+        var line = FieldSolver.Default.Solve(reference.Section).Line;
         Assert.True(MatrixErrors.Largest(line.CapacitanceFaradPerMetre, reference.Capacitance) <= bound);
         Assert.True(MatrixErrors.Largest(line.InductanceHenryPerMetre, reference.Inductance) <= bound);
         foreach (var (name, value) in reference.Impedances)
@@ -85,6 +86,6 @@ public sealed class FieldSolverReferenceTests
     {
         var capacitance = line.CapacitanceFaradPerMetre[0, 0] + sign * line.CapacitanceFaradPerMetre[0, 1];
         var inductance = line.InductanceHenryPerMetre[0, 0] + sign * line.InductanceHenryPerMetre[0, 1];
-        return (Math.Sqrt(inductance / capacitance), inductance * capacitance * LineSolution.SpeedOfLight * LineSolution.SpeedOfLight);
+        return (Math.Sqrt(inductance / capacitance), inductance * capacitance * Vacuum.SpeedOfLight * Vacuum.SpeedOfLight);
     }
 }
