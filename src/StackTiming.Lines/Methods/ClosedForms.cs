@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using StackTiming.Lines.Layered;
 using StackTiming.Lines.Microstrip;
 using StackTiming.Lines.Sections;
 using StackTiming.Lines.Solutions;
@@ -10,7 +11,7 @@ namespace StackTiming.Lines.Methods;
 public static class ClosedForms
 {
     /// <summary>The closed forms, the preferred ones of a geometry first.</summary>
-    public static ImmutableArray<IClosedForm> InOrderOfPreference { get; } = [new HammerstadJensen1980(), new Cohn1954()];
+    public static ImmutableArray<IClosedForm> InOrderOfPreference { get; } = [new HammerstadJensen1980(), new Cohn1954(), new Yamashita1968()];
 
     /// <summary>The closed forms as a calculator, for callers that take either them or the field solver.</summary>
     public static ILineCalculator Calculator { get; } = new ClosedFormCalculator();

@@ -23,6 +23,16 @@ public static class MethodCatalogue
         "exact",
         [], IsSecondOpinion: false);
 
+    /// <summary>Everything in flat layers over a plane or between two.</summary>
+    public static LineMethod Yamashita1968 { get; } = new(
+        "yamashita-1968", "Yamashita 1968",
+        "E. Yamashita, R. Mittra, \"Variational method for the analysis of microstrip lines\", IEEE Trans. MTT-16, 1968, pp. 251–256; E. Yamashita, \"Variational "
+        + "method for the analysis of microstrip-like transmission lines\", ibid., pp. 529–535",
+        "any traces over a plane or between two planes in flat dielectrics: masked, embedded, offset, coupled, broadside, with coplanar pours; a trapezoid is three strips",
+        "t ≤ 0.8·w, gaps ≥ 0.5·t; mask fitted for traces 25 to 60 µm thick",
+        "none for thick traces",
+        [], IsSecondOpinion: false);
+
     /// <summary>All methods, in the order of the geometries.</summary>
-    public static ImmutableArray<LineMethod> All { get; } = [HammerstadJensen1980, Cohn1954];
+    public static ImmutableArray<LineMethod> All { get; } = [HammerstadJensen1980, Cohn1954, Yamashita1968];
 }
