@@ -27,8 +27,8 @@ public sealed class Yamashita1968 : IClosedForm
     {
         if (section.BottomPlaneMetres is not { } bottom)
             return "it needs an infinite plane below the traces";
-        if (section.Slabs.IsEmpty)
-            return "it needs a dielectric between the plane and the traces";
+        if (section.Slabs.IsEmpty && section.TopMask is not null)
+            return "it needs a dielectric under the mask";
         if (section.Conductors.Length > MostConductors)
             return $"it describes at most {MostConductors} conductors";
         foreach (var c in section.Conductors)
@@ -114,14 +114,7 @@ public sealed class Yamashita1968 : IClosedForm
             voltages[i] = next;
             next = -0.5;
         }
-        var shares = layered.EnergyShares(voltages, pair);
-        return
-        [
-            .. layered.Dielectrics.Zip(shares, (d, s) => new DielectricShare(d.Name, s))
-                .GroupBy(s => s.Dielectric)
-                .Select(g => new DielectricShare(g.Key, g.Sum(s => s.Share)))
-                .Where(s => s.Share > 1e-6),
-        ];
+        return EnergyShares.ByName(layered.Dielectrics, layered.EnergyShares(voltages, pair));
     }
 
     private ImmutableArray<string> Warnings(CrossSection section)

@@ -11,6 +11,7 @@ namespace StackTiming.Lines.Methods;
 internal static class EnergyShares
 {
     private const double RelativeStep = 1e-4;
+    private const double Negligible = 1e-6;
 
     /// <summary>Shares by central differences, normalised to a sum of 1.</summary>
     /// <param name="dielectrics">The dielectrics.</param>
@@ -32,9 +33,36 @@ internal static class EnergyShares
             dks[i] = stated;
             sum += shares[i] = Math.Max(0, (above - below) / (RelativeStep * (above + below)));
         }
-        var result = ImmutableArray.CreateBuilder<DielectricShare>(dks.Length);
-        for (var i = 0; i < dks.Length; i++)
-            result.Add(new DielectricShare(dielectrics[i].Name, shares[i] / sum));
-        return result.MoveToImmutable();
+        return ByName(dielectrics, Array.ConvertAll(shares, s => s / sum));
+    }
+
+    /// <summary>Shares by name: materials of the same name add up, and those without any energy are left out.</summary>
+    /// <param name="dielectrics">The dielectrics.</param>
+    /// <param name="shares">Their shares.</param>
+    public static ImmutableArray<DielectricShare> ByName(ReadOnlySpan<SectionDielectric> dielectrics, ReadOnlySpan<double> shares)
+    {
+        var result = ImmutableArray.CreateBuilder<DielectricShare>(dielectrics.Length);
+        for (var i = 0; i < dielectrics.Length; i++)
+        {
+            if (shares[i] < Negligible)
+                continue;
+            var name = dielectrics[i].Name;
+            var known = IndexOf(result, name);
+            if (known < 0)
+                result.Add(new DielectricShare(name, shares[i]));
+            else
+                result[known] = result[known] with { Share = result[known].Share + shares[i] };
+        }
+        return result.ToImmutable();
+    }
+
+    private static int IndexOf(ImmutableArray<DielectricShare>.Builder shares, string name)
+    {
+        for (var i = 0; i < shares.Count; i++)
+        {
+            if (shares[i].Dielectric == name)
+                return i;
+        }
+        return -1;
     }
 }

@@ -45,7 +45,7 @@ public readonly record struct SectionGeometry(SectionKind Kind, bool IsHomogeneo
 
     private static SectionKind KindOf(CrossSection section, bool hasTop)
     {
-        if (section.BottomPlaneMetres is null || section.Slabs.IsEmpty)
+        if (section.BottomPlaneMetres is null)
             return SectionKind.Other;
         var conductors = section.Conductors;
         var signals = 0;
@@ -67,16 +67,23 @@ public readonly record struct SectionGeometry(SectionKind Kind, bool IsHomogeneo
         };
     }
 
-    /// <summary>True where traces stand on the top of a single slab in air.</summary>
+    /// <summary>True where traces stand on the top of a single slab in air, or in air alone.</summary>
     /// <param name="section">The section.</param>
     public static bool IsBare(CrossSection section) =>
-        section.TopMask is null && section.TopPlaneMetres is null && section.Slabs.Length == 1
-        && section.Conductors.All(c => Near(c.BottomMetres, section.Slabs[0].TopMetres, section.Slabs[0].ThicknessMetres));
+        section.TopMask is null && section.TopPlaneMetres is null
+        && (section.Slabs.IsEmpty
+            || (section.Slabs.Length == 1 && section.Conductors.All(c => Near(c.BottomMetres, section.Slabs[0].TopMetres, section.Slabs[0].ThicknessMetres))));
+
+    /// <summary>The dielectric on the lower plane: the only one of a homogeneous section.</summary>
+    /// <param name="section">The section.</param>
+    public static SectionDielectric LowestDielectric(CrossSection section) => section.Slabs.IsEmpty ? SectionDielectric.Air : section.Slabs[0].Dielectric;
 
     private static bool Homogeneous(CrossSection section, bool hasTop)
     {
-        if (section.TopMask is not null || section.BottomMask is not null || section.Slabs.IsEmpty)
+        if (section.TopMask is not null || section.BottomMask is not null)
             return false;
+        if (section.Slabs.IsEmpty)
+            return true;
         var first = section.Slabs[0].Dielectric.Dk;
         return section.Slabs.All(s => s.Dielectric.Dk == first) && (hasTop || first == 1);
     }

@@ -25,16 +25,16 @@ public sealed class HammerstadJensen1980 : IClosedForm
     public LineSolution Calculate(CrossSection section)
     {
         var trace = section.Conductors[0];
-        var slab = section.Slabs[0];
+        var dielectric = SectionGeometry.LowestDielectric(section);
         var height = trace.BottomMetres - section.BottomPlaneMetres!.Value;
         var width = EquivalentWidth(trace);
-        var (z0, epsEff) = Line(width, height, trace.ThicknessMetres, slab.Dielectric.Dk);
+        var (z0, epsEff) = Line(width, height, trace.ThicknessMetres, dielectric.Dk);
         double Eps(double dk) => Line(width, height, trace.ThicknessMetres, dk).EpsEff;
         var verdict = new Validity(Method)
             .Within("width / height", width / height, 0.01, 100)
-            .Within("Dk", slab.Dielectric.Dk, 1, 128)
+            .Within("Dk", dielectric.Dk, 1, 128)
             .AtMost("thickness / width", trace.ThicknessMetres / width, 1);
-        var shares = EnergyShares.FromPermittivity([slab.Dielectric, SectionDielectric.Air], dks => Eps(dks[0] / dks[1]) * dks[1]);
+        var shares = EnergyShares.FromPermittivity([dielectric, SectionDielectric.Air], dks => Eps(dks[0] / dks[1]) * dks[1]);
         return Solved.Single(trace.Name, Method, z0, epsEff, shares, verdict.Warnings);
     }
 
@@ -60,7 +60,7 @@ public sealed class HammerstadJensen1980 : IClosedForm
             var coth = 1 + 2 / (Math.Exp(2 * x) - 1);
             var widening = t / Math.PI * Math.Log(1 + 4 * Math.E / (t * coth * coth));
             air = u + widening;
-            var root = Math.Exp(Math.Sqrt(dk - 1));
+            var root = Math.Exp(Math.Sqrt(Math.Max(0, dk - 1)));
             filled = u + 0.5 * (1 + 2 / (root + 1 / root)) * widening;
         }
         var zAir = AirImpedance(air);

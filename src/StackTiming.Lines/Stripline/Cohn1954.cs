@@ -27,7 +27,7 @@ public sealed class Cohn1954 : IClosedForm
     public LineSolution Calculate(CrossSection section)
     {
         var trace = section.Conductors[0];
-        var dielectric = section.Slabs[0].Dielectric;
+        var dielectric = SectionGeometry.LowestDielectric(section);
         var spacing = section.TopPlaneMetres!.Value - section.BottomPlaneMetres!.Value;
         var z0 = Z0Ohms(trace.WideMetres, spacing, dielectric.Dk);
         return Solved.Single(trace.Name, Method, z0, dielectric.Dk, [new DielectricShare(dielectric.Name, 1)], []);
