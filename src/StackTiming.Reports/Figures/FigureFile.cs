@@ -1,0 +1,40 @@
+using SkiaSharp;
+using StackTiming.Reports.Appearance;
+using StackTiming.Reports.Documents;
+
+namespace StackTiming.Reports.Figures;
+
+/// <summary>Writes a drawing on its own, as a picture or as a vector file.</summary>
+public static class FigureFile
+{
+    /// <summary>Writes a PNG picture on white.</summary>
+    /// <param name="drawing">The drawing.</param>
+    /// <param name="widthPoints">Width, points.</param>
+    /// <param name="pixelsPerPoint">Resolution: 2 gives 144 pixels an inch.</param>
+    /// <param name="output">Where to.</param>
+    public static void WritePng(IDrawing drawing, float widthPoints, float pixelsPerPoint, Stream output)
+    {
+        var height = drawing.HeightFor(widthPoints);
+        const float border = 8;
+        var info = new SKImageInfo((int)MathF.Ceiling((widthPoints + 2 * border) * pixelsPerPoint), (int)MathF.Ceiling((height + 2 * border) * pixelsPerPoint));
+        using var surface = SKSurface.Create(info);
+        surface.Canvas.Clear(Palette.Paper);
+        surface.Canvas.Scale(pixelsPerPoint);
+        surface.Canvas.Translate(border, border);
+        drawing.Draw(surface.Canvas, widthPoints, height);
+        using var image = surface.Snapshot();
+        using var data = image.Encode(SKEncodedImageFormat.Png, 100);
+        data.SaveTo(output);
+    }
+
+    /// <summary>Writes an SVG file.</summary>
+    /// <param name="drawing">The drawing.</param>
+    /// <param name="widthPoints">Width, points.</param>
+    /// <param name="output">Where to.</param>
+    public static void WriteSvg(IDrawing drawing, float widthPoints, Stream output)
+    {
+        var height = drawing.HeightFor(widthPoints);
+        using var canvas = SKSvgCanvas.Create(SKRect.Create(widthPoints, height), output);
+        drawing.Draw(canvas, widthPoints, height);
+    }
+}
