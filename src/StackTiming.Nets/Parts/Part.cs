@@ -1,3 +1,4 @@
+using System.Collections.Frozen;
 using System.Collections.Immutable;
 using StackTiming.Stackups.Reading;
 
@@ -9,4 +10,4 @@ namespace StackTiming.Nets.Parts;
 /// <param name="Pins">The pins that the file states, by name.</param>
 /// <param name="Joins">Pairs of pins that pass the signal on; empty for a part that is not in series.</param>
 public sealed record Part(
-    string Name, FilePosition At, ImmutableDictionary<string, PartPin> Pins, ImmutableArray<SeriesJoin> Joins);
+    string Name, FilePosition At, FrozenDictionary<string, PartPin> Pins, ImmutableArray<SeriesJoin> Joins);

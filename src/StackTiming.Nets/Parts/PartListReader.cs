@@ -1,4 +1,4 @@
-using System.Collections.Immutable;
+using System.Collections.Frozen;
 using StackTiming.Stackups.Reading;
 
 namespace StackTiming.Nets.Parts;
@@ -16,7 +16,7 @@ public static class PartListReader
         foreach (var entry in map.Named("models"))
             models[entry.Key] = map.MapOf(entry.Value, entry.Key) is { } inner ? BufferModelReader.Read(entry.Key, inner) : null;
         var reader = new PartReader(models);
-        var parts = ImmutableDictionary.CreateBuilder<string, Part>(StringComparer.Ordinal);
+        var parts = new Dictionary<string, Part>(StringComparer.Ordinal);
         foreach (var entry in map.Named("parts"))
         {
             if (map.MapOf(entry.Value, entry.Key) is { } inner)
@@ -27,6 +27,6 @@ public static class PartListReader
         map.Finish();
         if (map.Problems.ErrorCount != before)
             return null;
-        return new PartList(models.ToImmutableDictionary(m => m.Key, m => m.Value!, StringComparer.Ordinal), parts.ToImmutable());
+        return new PartList(models.ToFrozenDictionary(m => m.Key, m => m.Value!, StringComparer.Ordinal), parts.ToFrozenDictionary(StringComparer.Ordinal));
     }
 }

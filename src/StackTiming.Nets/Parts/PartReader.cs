@@ -1,3 +1,4 @@
+using System.Collections.Frozen;
 using System.Collections.Immutable;
 using StackTiming.Nets.Names;
 using StackTiming.Stackups.Quantities;
@@ -14,17 +15,17 @@ internal sealed class PartReader(IReadOnlyDictionary<string, BufferModel?> model
     /// <param name="map">Its mapping.</param>
     public Part Read(string name, MapReader map)
     {
-        var pins = ImmutableDictionary.CreateBuilder<string, PartPin>(StringComparer.Ordinal);
+        var pins = new Dictionary<string, PartPin>(StringComparer.Ordinal);
         foreach (var entry in map.Named("pins"))
             ReadPins(entry, map, pins);
         var joins = ReadJoins(name, map, pins);
         if (!map.Has("pins") && joins.IsEmpty)
             map.Problems.Error(map.At, $"the part '{Suggestion.Shorten(name)}' has neither pins nor joins", "write pins: { 1: { model: … } } or joins: [1, 2]");
         map.Finish();
-        return new Part(name, map.At, pins.ToImmutable(), joins);
+        return new Part(name, map.At, pins.ToFrozenDictionary(StringComparer.Ordinal), joins);
     }
 
-    private void ReadPins(DataEntry entry, MapReader part, ImmutableDictionary<string, PartPin>.Builder pins)
+    private void ReadPins(DataEntry entry, MapReader part, Dictionary<string, PartPin> pins)
     {
         if (part.MapOf(entry.Value, entry.Key) is not { } map)
             return;
@@ -46,7 +47,7 @@ internal sealed class PartReader(IReadOnlyDictionary<string, BufferModel?> model
         }
     }
 
-    private static ImmutableArray<SeriesJoin> ReadJoins(string name, MapReader map, ImmutableDictionary<string, PartPin>.Builder pins)
+    private static ImmutableArray<SeriesJoin> ReadJoins(string name, MapReader map, Dictionary<string, PartPin> pins)
     {
         var resistance = map.Quantity("resistance", Dimension.Resistance, QuantityRange.NotNegative) ?? Quantity.Exact(0);
         var inductance = map.Quantity("inductance", Dimension.Inductance, QuantityRange.NotNegative) ?? Quantity.Exact(0);
@@ -86,7 +87,7 @@ internal sealed class PartReader(IReadOnlyDictionary<string, BufferModel?> model
 
     // Two nets of a list whose rows name no pins.
     private static void PlaceJoin(
-        MapReader map, ImmutableArray<DataNode> nets, ImmutableArray<SeriesJoin>.Builder joins, ImmutableDictionary<string, PartPin>.Builder pins)
+        MapReader map, ImmutableArray<DataNode> nets, ImmutableArray<SeriesJoin>.Builder joins, Dictionary<string, PartPin> pins)
     {
         if (joins.Count != 1 || nets is not [DataScalar first, DataScalar second])
         {
