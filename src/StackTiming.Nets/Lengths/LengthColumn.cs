@@ -35,4 +35,6 @@ public enum LengthColumn
     NeighbourGap,
     /// <summary>Length beside the neighbour.</summary>
     NeighbourLength,
+    /// <summary>Layers between which a via's hole is drilled, as <c>L1&gt;L3</c>; the whole board where empty.</summary>
+    Barrel,
 }

@@ -10,7 +10,7 @@ public static class LengthColumns
     public static ImmutableArray<string> Names { get; } =
     [
         "net", "from", "to", "kind", "layer", "length", "width", "gap", "meander-gap", "meander-leg",
-        "drill", "pad", "antipad", "neighbour", "neighbour-gap", "neighbour-length",
+        "drill", "pad", "antipad", "neighbour", "neighbour-gap", "neighbour-length", "barrel",
     ];
 
     private static readonly FrozenDictionary<string, LengthColumn> ByName =

@@ -103,8 +103,11 @@ internal sealed class LengthRows
             problems.Note(
                 cells.PositionOf(row, LengthColumn.Length), "the length of a via follows from the stack-up; what its rows say is not used");
         }
+        var barrel = BarrelOf(row);
         var hole = new SegmentDetails
         {
+            BarrelFirst = barrel.First,
+            BarrelSecond = barrel.Second,
             DrillMetres = Optional(row, LengthColumn.Drill),
             PadMetres = Optional(row, LengthColumn.Pad),
             AntipadMetres = Optional(row, LengthColumn.Antipad),
@@ -231,18 +234,32 @@ internal sealed class LengthRows
         var text = cells.TextOf(row, LengthColumn.Layer);
         if (text.Length == 0 && format.DefaultLayer is { } standard)
             text = standard;
+        if (text.Length > 0)
+            return LayersIn(text, row, LengthColumn.Layer);
+        if (header.PlaceOf(LengthColumn.Layer) >= 0)
+            problems.Error(cells.PositionOf(row, LengthColumn.Layer), "'layer' is empty", "write a layer such as L1, or L1>L3 for a via");
+        return new LayerCell("", "");
+    }
+
+    private LayerCell BarrelOf(SepReader.Row row)
+    {
+        var text = cells.TextOf(row, LengthColumn.Barrel);
         if (text.Length == 0)
-        {
-            if (header.PlaceOf(LengthColumn.Layer) >= 0)
-                problems.Error(cells.PositionOf(row, LengthColumn.Layer), "'layer' is empty", "write a layer such as L1, or L1>L3 for a via");
             return new LayerCell("", "");
-        }
+        var barrel = LayersIn(text, row, LengthColumn.Barrel);
+        if (barrel is { First.Length: > 0, Second.Length: 0 })
+            problems.Error(cells.PositionOf(row, LengthColumn.Barrel), "'barrel' needs the two layers between which the hole is drilled", "write both, such as L1>L3");
+        return barrel;
+    }
+
+    private LayerCell LayersIn(ReadOnlySpan<char> text, SepReader.Row row, LengthColumn column)
+    {
         if (layers.TryGet(text, out var cell))
             return cell;
-        var at = header.PlaceOf(LengthColumn.Layer) >= 0 ? cells.PositionOf(row, LengthColumn.Layer) : cells.PositionOf(row);
+        var at = cells.PositionOf(row, column);
         if (EndNames.ObjectionTo(text) is not { } objection)
             return layers.Add(text.ToString(), at);
-        problems.Error(at, $"'layer' {objection}", "check the separators and quotes of the row");
+        problems.Error(at, $"'{LengthColumns.NameOf(column)}' {objection}", "check the separators and quotes of the row");
         return new LayerCell("", "");
     }
 

@@ -27,6 +27,12 @@ public sealed record SegmentDetails
     /// <summary>Diameter of the clearance in the planes around a via in metres; 0 where not stated.</summary>
     public double AntipadMetres { get; init; }
 
+    /// <summary>Layer at one end of a via's drilled barrel, or empty where the hole goes through the whole board.</summary>
+    public string BarrelFirst { get; init; } = "";
+
+    /// <summary>Layer at the other end of a via's drilled barrel, or empty where the hole goes through the whole board.</summary>
+    public string BarrelSecond { get; init; } = "";
+
     /// <summary>Nothing stated.</summary>
     public static SegmentDetails None { get; } = new();
 }
