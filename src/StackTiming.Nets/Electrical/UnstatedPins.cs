@@ -29,11 +29,12 @@ internal sealed class UnstatedPins(PartList parts, ProblemList problems)
         foreach (var (part, (pin, at, count, partKnown)) in byPart)
         {
             var others = count > 1 ? $" and {count - 1} more of its pins" : "";
+            var effect = count > 1 ? "they neither drive nor load" : "it neither drives nor loads";
             problems.Note(
                 at,
                 partKnown
-                    ? $"the parts file does not state the pin '{pin}'{others}; they neither drive nor load"
-                    : $"the part '{part}' is not in the parts file; '{pin}'{others} neither drive nor load");
+                    ? $"the parts file does not state the pin '{pin}'{others}; {effect}"
+                    : $"the part '{part}' is not in the parts file, nor '{pin}'{others}; {effect}");
         }
     }
 }

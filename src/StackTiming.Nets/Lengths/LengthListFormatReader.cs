@@ -12,14 +12,24 @@ public static class LengthListFormatReader
 {
     private static readonly Dictionary<string, char> Separators = new(StringComparer.Ordinal)
     {
-        [","] = ',', [";"] = ';', ["tab"] = '\t', ["\t"] = '\t', ["|"] = '|', ["comma"] = ',', ["semicolon"] = ';',
+        [","] = ',',
+        [";"] = ';',
+        ["tab"] = '\t',
+        ["\t"] = '\t',
+        ["|"] = '|',
+        ["comma"] = ',',
+        ["semicolon"] = ';',
     };
 
     private static readonly Dictionary<string, bool> Decimals = new(StringComparer.Ordinal) { ["point"] = false, ["comma"] = true };
 
     private static readonly Dictionary<string, char> PinSeparators = new(StringComparer.Ordinal)
     {
-        ["."] = '.', ["-"] = '-', [":"] = ':', ["_"] = '_', ["/"] = '/',
+        ["."] = '.',
+        ["-"] = '-',
+        [":"] = ':',
+        ["_"] = '_',
+        ["/"] = '/',
     };
 
     /// <summary>Reads the keys.</summary>
