@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using StackTiming.Nets.Electrical;
 using StackTiming.Nets.Lengths;
 using StackTiming.Nets.Parts;
 using StackTiming.Rules.Judging;
@@ -24,6 +25,9 @@ public sealed record Board
 
     /// <summary>The routed lengths.</summary>
     public required LengthList Lengths { get; init; }
+
+    /// <summary>The nets as series parts join them.</summary>
+    public required ElectricalNets Electrical { get; init; }
 
     /// <summary>The parts; none where the board file names no parts file.</summary>
     public required PartList Parts { get; init; }

@@ -38,9 +38,8 @@ public sealed class DelayTable
         var missing = ImmutableArray.CreateBuilder<(string, string)>();
         var ways = new List<(DrivenNet Driven, ReceiverPath Path)>();
         var several = false;
-        foreach (var net in nets)
+        foreach (var (net, drives, objection) in JudgedNet.Of(board, nets, query.Drive))
         {
-            var drives = board.Drives(net, query.Drive.Of(net), out var objection);
             var before = ways.Count;
             foreach (var driven in drives)
             {
@@ -99,9 +98,10 @@ public sealed class DelayTable
 /// <param name="Delays">The delays.</param>
 public sealed record Comparison(string From, string To, ImmutableArray<ReceiverDelay> Delays)
 {
-    /// <summary>Names a delay: its net, and its receiver where the net has several.</summary>
+    /// <summary>Names a delay: its net, and its driver and receiver where there are several.</summary>
     /// <param name="delay">One of the delays.</param>
-    public string SubjectOf(ReceiverDelay delay) => To.Length == 0 ? delay.Driven.Net : $"{delay.Driven.Net} at {delay.Path.Receiver}";
+    public string SubjectOf(ReceiverDelay delay) =>
+        To.Length == 0 ? delay.Driven.Net : $"{delay.Driven.Net} from {delay.Driven.Driver} at {delay.Path.Receiver}";
 }
 
 /// <summary>Which delays a rule looks at.</summary>

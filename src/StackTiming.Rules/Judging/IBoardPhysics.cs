@@ -1,6 +1,7 @@
 using System.Collections.Immutable;
 using StackTiming.Nets.Lengths;
 using StackTiming.Stackups.Layers;
+using StackTiming.Waves.Paths;
 
 namespace StackTiming.Rules.Judging;
 
@@ -27,7 +28,7 @@ public interface IBoardPhysics
     /// <summary>What a trace does per metre.</summary>
     /// <param name="trace">A trace segment.</param>
     /// <param name="objection">Why there is no answer.</param>
-    LineFacts? LineOf(in Segment trace, out string objection);
+    BoardLine? LineOf(in Segment trace, out string objection);
 
     /// <summary>The width at which a trace on a layer has an impedance.</summary>
     /// <param name="layer">Layer.</param>

@@ -17,23 +17,25 @@ public sealed record JudgedResponse(
     /// <param name="query">Who drives, which receivers, which edges.</param>
     public static IEnumerable<JudgedResponse> Of(IBoardPhysics board, Judgement judgement, ImmutableArray<string> nets, EdgeQuery query)
     {
-        foreach (var net in nets)
+        foreach (var judged in JudgedNet.Of(board, nets, query.Drive))
         {
-            var drives = board.Drives(net, query.Drive.Of(net), out var objection);
-            if (drives.IsEmpty)
-                judgement.Unchecked(net, [net], objection);
-            foreach (var driven in drives)
+            if (judged.Drives.IsEmpty)
+                judgement.Unchecked(judged.Net, [judged.Net], judged.Objection);
+            foreach (var driven in judged.Drives)
             {
                 var paths = driven.Receivers.Where(p => query.At.Includes(p.Receiver)).ToArray();
                 if (paths.Length == 0)
-                    judgement.Unchecked(net, [net], driven.Receivers.IsEmpty ? "no receiver is on it" : $"it does not reach {query.At.Text}");
+                {
+                    judgement.Unchecked(
+                        judged.SubjectOf(driven), [judged.Net], driven.Receivers.IsEmpty ? "no receiver is on it" : $"it does not reach {query.At.Text}");
+                }
                 foreach (var path in paths)
                 {
-                    var subject = driven.Receivers.Length > 1 || drives.Length > 1 ? $"{net} at {path.Receiver}" : net;
+                    var subject = judged.SubjectOf(driven, path.Receiver);
                     if (Of(board, driven, path, query, out var reason) is { } responses)
                         yield return new JudgedResponse(subject, driven, path, responses);
                     else
-                        judgement.Unchecked(subject, [net], reason);
+                        judgement.Unchecked(subject, [judged.Net], reason);
                 }
             }
         }

@@ -31,7 +31,7 @@ public sealed record FirstWaveRule(RuleHeader Header, NetSet Nets, double Margin
     public override string LimitText => $"at least {DisplayUnit.Millivolts.Show(MarginVolts)} beyond the threshold on the first wave";
 
     /// <inheritdoc/>
-    public override IEnumerable<WaveNeed> WaveNeeds() => WaveNeed.ForEdges(Nets.Names, Query.Drive, Query.Edges);
+    public override IEnumerable<NetNeed> Needs() => NetNeed.ForEdges(Nets.Names, Query.Drive, Query.Edges);
 
     /// <inheritdoc/>
     public override void Judge(IBoardPhysics board, Judgement judgement)

@@ -34,7 +34,7 @@ public sealed record FlightTimeRule(RuleHeader Header, NetSet Nets, Window Allow
     public override string LimitText => Allowed.Show(DisplayUnit.Picoseconds);
 
     /// <inheritdoc/>
-    public override IEnumerable<WaveNeed> WaveNeeds() => WaveNeed.ForDelays(Nets.Names, Query);
+    public override IEnumerable<NetNeed> Needs() => NetNeed.ForDelays(Nets.Names, Query);
 
     /// <inheritdoc/>
     public override void Judge(IBoardPhysics board, Judgement judgement)

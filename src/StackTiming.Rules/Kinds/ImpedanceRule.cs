@@ -4,6 +4,7 @@ using StackTiming.Rules.Findings;
 using StackTiming.Rules.Judging;
 using StackTiming.Rules.RuleFiles;
 using StackTiming.Stackups.Quantities;
+using StackTiming.Waves.Paths;
 
 namespace StackTiming.Rules.Kinds;
 
@@ -98,7 +99,7 @@ public sealed record ImpedanceRule(
                 continue;
             }
             judged++;
-            var ohms = differential ? line.Pair!.ZDiffOhms : line.Z0Ohms;
+            var ohms = differential ? line.Pair!.ZDiffOhms : line.Solution.Z0Ohms;
             var margin = Allowed.Margin(ohms);
             if (worst is null || margin < worst.Margin)
                 worst = new Worst(segment, line, ohms, margin);
@@ -153,5 +154,5 @@ public sealed record ImpedanceRule(
         return $"on {segment.Layer}, {DisplayUnit.Millimetres.Show(segment.WidthMetres)} wide{gap} for {DisplayUnit.Millimetres.Show(segment.LengthMetres)}";
     }
 
-    private sealed record Worst(Segment Segment, LineFacts Line, double Ohms, double Margin);
+    private sealed record Worst(Segment Segment, BoardLine Line, double Ohms, double Margin);
 }

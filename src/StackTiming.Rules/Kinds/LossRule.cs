@@ -36,19 +36,21 @@ public sealed record LossRule(RuleHeader Header, NetSet Nets, double AtHertz, do
     private string Gigahertz => (AtHertz * 1e-9).ToString("0.####", System.Globalization.CultureInfo.InvariantCulture) + " GHz";
 
     /// <inheritdoc/>
+    public override IEnumerable<NetNeed> Needs() => NetNeed.ForPaths(Nets.Names, Drive);
+
+    /// <inheritdoc/>
     public override void Judge(IBoardPhysics board, Judgement judgement)
     {
-        foreach (var net in Nets.Names)
+        foreach (var judged in JudgedNet.Of(board, Nets.Names, Drive))
         {
-            var drives = board.Drives(net, Drive.Of(net), out var objection);
-            if (drives.IsEmpty)
-                judgement.Unchecked(net, [net], objection);
-            foreach (var driven in drives)
+            if (judged.Drives.IsEmpty)
+                judgement.Unchecked(judged.Net, [judged.Net], judged.Objection);
+            foreach (var driven in judged.Drives)
             {
                 if (driven.Receivers.IsEmpty)
-                    judgement.Unchecked(net, [net], "no receiver is on it");
+                    judgement.Unchecked(judged.SubjectOf(driven), [judged.Net], "no receiver is on it");
                 foreach (var path in driven.Receivers)
-                    Judge(board, judgement, driven, path, driven.Receivers.Length > 1 || drives.Length > 1 ? $"{net} at {path.Receiver}" : net);
+                    Judge(board, judgement, driven, path, judged.SubjectOf(driven, path.Receiver));
             }
         }
     }

@@ -36,7 +36,7 @@ public sealed record MatchRule(RuleHeader Header, NetSet Nets, double WithinSeco
     public override string LimitText => $"within {DisplayUnit.Picoseconds.Show(WithinSeconds)} of each other";
 
     /// <inheritdoc/>
-    public override IEnumerable<WaveNeed> WaveNeeds() => WaveNeed.ForDelays(Nets.Names, Query);
+    public override IEnumerable<NetNeed> Needs() => NetNeed.ForDelays(Nets.Names, Query);
 
     /// <inheritdoc/>
     public override void Judge(IBoardPhysics board, Judgement judgement)

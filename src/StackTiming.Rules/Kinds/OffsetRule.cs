@@ -38,7 +38,7 @@ public sealed record OffsetRule(RuleHeader Header, NetSet Nets, ReferenceNets To
     public override string LimitText => $"{Allowed.Show(DisplayUnit.Picoseconds)} against {To.Name}";
 
     /// <inheritdoc/>
-    public override IEnumerable<WaveNeed> WaveNeeds() => WaveNeed.ForDelays([.. Nets.Names, .. To.Nets], WithReferences);
+    public override IEnumerable<NetNeed> Needs() => NetNeed.ForDelays([.. Nets.Names, .. To.Nets], WithReferences);
 
     /// <inheritdoc/>
     public override void Judge(IBoardPhysics board, Judgement judgement)

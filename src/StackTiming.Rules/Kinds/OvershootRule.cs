@@ -44,7 +44,7 @@ public sealed record OvershootRule(
     }
 
     /// <inheritdoc/>
-    public override IEnumerable<WaveNeed> WaveNeeds() => WaveNeed.ForEdges(Nets.Names, Query.Drive, Query.Edges);
+    public override IEnumerable<NetNeed> Needs() => NetNeed.ForEdges(Nets.Names, Query.Drive, Query.Edges);
 
     /// <inheritdoc/>
     public override void Judge(IBoardPhysics board, Judgement judgement)

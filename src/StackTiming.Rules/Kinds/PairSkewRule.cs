@@ -43,6 +43,9 @@ public sealed record PairSkewRule(
     }.Where(t => t is not null));
 
     /// <inheritdoc/>
+    public override IEnumerable<NetNeed> Needs() => Pairs.SelectMany(p => NetNeed.ForDelays([p.Positive, p.Negative], Query));
+
+    /// <inheritdoc/>
     public override void Judge(IBoardPhysics board, Judgement judgement)
     {
         foreach (var pair in Pairs)

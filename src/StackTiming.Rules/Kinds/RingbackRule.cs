@@ -31,7 +31,7 @@ public sealed record RingbackRule(RuleHeader Header, NetSet Nets, double MarginV
     public override string LimitText => $"at least {DisplayUnit.Millivolts.Show(MarginVolts)} beyond the threshold";
 
     /// <inheritdoc/>
-    public override IEnumerable<WaveNeed> WaveNeeds() => WaveNeed.ForEdges(Nets.Names, Query.Drive, Query.Edges);
+    public override IEnumerable<NetNeed> Needs() => NetNeed.ForEdges(Nets.Names, Query.Drive, Query.Edges);
 
     /// <inheritdoc/>
     public override void Judge(IBoardPhysics board, Judgement judgement)

@@ -31,7 +31,7 @@ public sealed record SettlingRule(RuleHeader Header, NetSet Nets, double WithinS
     public override string LimitText => $"within {DisplayUnit.Picoseconds.Show(WithinSeconds)}";
 
     /// <inheritdoc/>
-    public override IEnumerable<WaveNeed> WaveNeeds() => WaveNeed.ForEdges(Nets.Names, Query.Drive, Query.Edges);
+    public override IEnumerable<NetNeed> Needs() => NetNeed.ForEdges(Nets.Names, Query.Drive, Query.Edges);
 
     /// <inheritdoc/>
     public override void Judge(IBoardPhysics board, Judgement judgement)

@@ -38,15 +38,17 @@ public sealed record StubRule(
         : $"at most {DisplayUnit.Percent.Show(MaxOfRise!.Value)} of the rise time";
 
     /// <inheritdoc/>
+    public override IEnumerable<NetNeed> Needs() => NetNeed.ForPaths(Nets.Names, Drive);
+
+    /// <inheritdoc/>
     public override void Judge(IBoardPhysics board, Judgement judgement)
     {
-        foreach (var net in Nets.Names)
+        foreach (var judged in JudgedNet.Of(board, Nets.Names, Drive))
         {
-            var drives = board.Drives(net, Drive.Of(net), out var objection);
-            if (drives.IsEmpty)
-                judgement.Unchecked(net, [net], objection);
-            foreach (var driven in drives)
-                Judge(board, judgement, driven, drives.Length > 1 ? $"{net} from {driven.Driver}" : net);
+            if (judged.Drives.IsEmpty)
+                judgement.Unchecked(judged.Net, [judged.Net], judged.Objection);
+            foreach (var driven in judged.Drives)
+                Judge(board, judgement, driven, judged.SubjectOf(driven));
         }
     }
 

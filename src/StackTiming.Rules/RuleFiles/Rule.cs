@@ -12,8 +12,8 @@ public abstract record Rule(RuleHeader Header)
     /// <summary>The limit in words, such as <c>within 10.00 ps</c>.</summary>
     public abstract string LimitText { get; }
 
-    /// <summary>The waveforms that it will ask for; none where it needs no waveforms.</summary>
-    public virtual IEnumerable<WaveNeed> WaveNeeds() => [];
+    /// <summary>What it will ask of its nets; nothing where the length list is enough.</summary>
+    public virtual IEnumerable<NetNeed> Needs() => [];
 
     /// <summary>
     /// Judges the rule: adds at least one finding for every net (or pair) of the rule, <c>unchecked</c> with its reason where it cannot be judged.

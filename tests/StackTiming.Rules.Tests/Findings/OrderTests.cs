@@ -8,8 +8,15 @@ public class OrderTests
 {
     private static Finding Make(FindingStatus status, Severity severity, double? relative, string rule = "R", string subject = "S") => new()
     {
-        Rule = rule, Kind = "match", Subject = subject, Status = status, Severity = severity, RelativeMargin = relative,
-        Explanation = "", RuleAt = FilePosition.WholeFile("x"), Nets = [],
+        Rule = rule,
+        Kind = "match",
+        Subject = subject,
+        Status = status,
+        Severity = severity,
+        RelativeMargin = relative,
+        Explanation = "",
+        RuleAt = FilePosition.WholeFile("x"),
+        Nets = [],
     };
 
     [Fact]

@@ -7,6 +7,7 @@ using StackTiming.Stackups.Copper;
 using StackTiming.Stackups.Layers;
 using StackTiming.Stackups.Quantities;
 using StackTiming.Stackups.Reading;
+using StackTiming.Waves.Paths;
 
 namespace StackTiming.Rules.Tests.Judging;
 
@@ -77,10 +78,10 @@ internal sealed class TinyBoard : IBoardPhysics
 
     public ReadOnlySpan<Segment> SegmentsOf(string net) => nets.GetValueOrDefault(net) ?? [];
 
-    public LineFacts? LineOf(in Segment trace, out string objection)
+    public BoardLine? LineOf(in Segment trace, out string objection)
     {
         objection = trace.Layer == "L4" ? "no closed form describes L4" : "";
-        return trace.Layer == "L4" ? null : Line(Ohms(trace.WidthMetres), Slope(trace.Layer), trace.GapMetres > 0);
+        return trace.Layer == "L4" ? null : Line(LineKey.Of(trace), Ohms(trace.WidthMetres), Slope(trace.Layer));
     }
 
     public double? WidthFor(string layer, double gapMetres, double targetOhms, bool differential) =>
@@ -110,7 +111,7 @@ internal sealed class TinyBoard : IBoardPhysics
                 isTrace ? s.LengthMetres * Slope(s.Layer) : viaSeconds.GetValueOrDefault(net, 10e-12), z));
         }
         var path = new ReceiverPath(receiverPart.GetValueOrDefault(net, "U2") + ".1", null, pieces.ToImmutable());
-        return [new DrivenNet(net, "U1.1", Driver, [path], stubs.GetValueOrDefault(net, []), SeriesOhms)];
+        return [new DrivenNet(net, "U1." + net, Driver, [path], stubs.GetValueOrDefault(net, []), SeriesOhms)];
     }
 
     public ReceiverResponse? Response(DrivenNet driven, string receiver, Edge edge, out string objection)
@@ -123,13 +124,13 @@ internal sealed class TinyBoard : IBoardPhysics
 
     private static double Slope(string layer) => layer == "L1" ? 6e-9 : 7e-9;
 
-    private static LineFacts Line(double ohms, double slope, bool pair)
+    private static BoardLine Line(LineKey key, double ohms, double slope)
     {
         var solution = new LineSolution(
             ["a"], "arithmetic", new[,] { { slope / ohms } }, new[,] { { slope * ohms } }, [], 0.01, []);
         const double c = 299_792_458.0;
         var eps = slope * c * slope * c;
-        return new LineFacts(solution, pair ? new PairModes(1.8 * ohms, 0.6 * ohms, eps, eps, true) : null);
+        return new BoardLine(key, solution, key.GapMetres > 0 ? new PairModes(1.8 * ohms, 0.6 * ohms, eps, eps, true) : null);
     }
 
     private static CopperLayer Copper(string name, CopperUse use) => new(

@@ -14,8 +14,14 @@ public class WaiverBookTests
 
     private static Finding Make(FindingStatus status, params string[] nets) => new()
     {
-        Rule = "STUB", Kind = "stub", Subject = string.Join('/', nets), Status = status, Severity = Severity.Must,
-        Explanation = "It is long.", RuleAt = FilePosition.WholeFile("x"), Nets = [.. nets],
+        Rule = "STUB",
+        Kind = "stub",
+        Subject = string.Join('/', nets),
+        Status = status,
+        Severity = Severity.Must,
+        Explanation = "It is long.",
+        RuleAt = FilePosition.WholeFile("x"),
+        Nets = [.. nets],
     };
 
     private static ResolvedWaiver Waiver(DateOnly? until, string rule, params string[] nets)
