@@ -29,7 +29,11 @@ public enum CopperUse
 /// <param name="WideFace">Which face the width on the drawing belongs to.</param>
 /// <param name="WidthToleranceMetres">Tolerance of trace widths on this layer, metres.</param>
 public sealed record CopperLayer(
-    FilePosition At, string Name, Quantity Thickness, CopperUse Use, CopperProperties Copper, WideFace WideFace, Tolerance WidthToleranceMetres) : Layer(At);
+    FilePosition At, string Name, Quantity Thickness, CopperUse Use, CopperProperties Copper, WideFace WideFace, Tolerance WidthToleranceMetres) : Layer(At)
+{
+    /// <summary>True where the file states the wide face (<c>base:</c>), false where it follows from the layers around.</summary>
+    public bool WideFaceStated { get; init; }
+}
 
 /// <summary>Whether a dielectric was cured before pressing.</summary>
 public enum DielectricKind

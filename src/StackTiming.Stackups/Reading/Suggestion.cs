@@ -16,7 +16,7 @@ public static class Suggestion
         if (word.Length <= 64)
         {
             var (distance, nearest) = sorted.Select(k => (Levenshtein.GetDistance(word, k), k)).Min();
-            if (distance <= Math.Max(1, word.Length / 3))
+            if (distance <= Math.Max(1, (word.Length + 1) / 3))
                 return $"did you mean '{nearest}'?";
         }
         const int most = 12;
