@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using StackTiming.Lines.Loss;
 using StackTiming.Lines.Sections;
 using StackTiming.Lines.Solutions;
 using StackTiming.Nets.Lengths;
@@ -20,7 +21,7 @@ public sealed class LineTable
     /// <summary>Name of the calculator that computed the lines.</summary>
     public string CalculatorName { get; }
 
-    /// <summary>Frequency at which Dk and Df were taken, Hz; null for the values as stated.</summary>
+    /// <summary>Frequency of the lines, Hz; null for lossless lines with Dk as stated.</summary>
     public double? FrequencyHertz { get; }
 
     /// <summary>The lines that could be computed, by layer, width and gap.</summary>
@@ -50,7 +51,7 @@ public sealed class LineTable
     /// <param name="stackUp">The stack-up.</param>
     /// <param name="keys">The lines.</param>
     /// <param name="calculator">Closed forms or the field solver.</param>
-    /// <param name="frequencyHertz">Frequency at which Dk and Df are taken, Hz; null for the values as stated.</param>
+    /// <param name="frequencyHertz">Frequency of Dk, Df and losses, Hz; null for lossless lines with Dk as stated.</param>
     /// <param name="cancellation">Stops the work.</param>
     /// <exception cref="OperationCanceledException">The work was stopped.</exception>
     public static LineTable Build(
@@ -91,6 +92,8 @@ public sealed class LineTable
             return (null, problems.Items.First(p => p.IsError).Message);
         if (calculator.Calculate(section) is not { } solution)
             return (null, calculator.Objection(section) ?? "there is no method for this cross-section");
-        return (new BoardLine(key, solution, key.GapMetres > 0 ? PairModes.Of(solution) : null), "");
+        var pair = key.GapMetres > 0 ? PairModes.Of(solution) : null;
+        var atFrequency = frequencyHertz is { } hertz ? IncrementalInductance.At(section, hertz, calculator) : null;
+        return (new BoardLine(key, solution, pair, atFrequency), "");
     }
 }

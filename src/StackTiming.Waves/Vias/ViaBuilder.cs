@@ -89,8 +89,8 @@ internal sealed class ViaSpan
         dkIntegrals = new double[Copper.Length];
         double depth = 0, integral = 0;
         var next = 0;
-        // Copper planes are taken as part of the dielectric above them: the clearances in them are filled with resin.
-        double dk = 1;
+        // Clearances in copper are filled with resin: they count as part of the dielectric above, the topmost as part of that below.
+        var dk = stackUp.Layers.OfType<DielectricLayer>().Select(l => DkOf(l, frequencyHertz)).FirstOrDefault(1);
         foreach (var layer in stackUp.Layers)
         {
             if (layer is DielectricLayer dielectric)
