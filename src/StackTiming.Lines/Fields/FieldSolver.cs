@@ -32,9 +32,11 @@ public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
     /// <summary>Id of the method.</summary>
     public const string MethodId = "field-solver";
 
-    private static readonly PanelDegrees[] Levels =
+    // Two solutions may agree better than either is right; the second figure of a level is the least error that it is trusted with.
+    private static readonly (PanelDegrees Degrees, double Floor)[] Levels =
     [
-        new(1.7, 2, 4, 6), new(1.7, 2.5, 5, 8), new(1.7, 3, 6, 10), new(1.7, 4, 8, 14), new(2, 5, 10, 18), new(2.2, 7, 14, PanelIntegral.MaxTerms),
+        (new(1.5, 2.0, 1.5, 3, 5), 1e-3), (new(1.5, 2.0, 2, 4, 7), 3e-5), (new(1.7, 2.1, 2.5, 5, 8), 1e-5), (new(1.7, 2.1, 3, 6, 10), 3e-6),
+        (new(1.7, 2.1, 4, 8, 14), 3e-7), (new(2, 2.2, 5, 10, 18), 1e-8), (new(2.2, 2.2, 7, 14, PanelIntegral.MaxTerms), 1e-8),
     ];
 
     /// <summary>The solver with <see cref="FieldSolverOptions.Default"/>.</summary>
@@ -83,12 +85,16 @@ public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
         SolvedMesh? coarse = null;
         double[,] inductance = new double[0, 0], coarseInductance = inductance;
         var error = double.PositiveInfinity;
-        foreach (var level in Levels)
+        foreach (var (level, floor) in Levels)
         {
             var fine = new SolvedMesh(framed, surfaces, pairs, frame.Symmetric, level);
             inductance = Inductance(fine.EmptyCapacitance);
             if (coarse is not null)
+            {
                 error = Math.Max(Difference(fine.FilledCapacitance, coarse.FilledCapacitance), Difference(inductance, coarseInductance));
+                error = double.IsNaN(error) ? error : Math.Max(error, floor);
+            }
+
             (coarse, coarseInductance) = (fine, inductance);
             if (error <= options.RelativeTolerance)
                 break;

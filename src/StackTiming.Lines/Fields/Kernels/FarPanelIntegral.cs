@@ -9,9 +9,12 @@ namespace StackTiming.Lines.Fields.Kernels;
 /// </summary>
 internal static class FarPanelIntegral
 {
-    private const int Powers = 14;
+    /// <summary>Highest power; at the nearest distance the next one is below 1e-8.</summary>
+    public const int Powers = 14;
 
-    private static readonly double[][] Moments = [MomentsOf(PanelMap.Straight), MomentsOf(PanelMap.Square), MomentsOf(PanelMap.Cube)];
+    private static readonly double[][] FieldMoments = [MomentsOf(PanelMap.Straight), MomentsOf(PanelMap.Square), MomentsOf(PanelMap.Cube)];
+
+    private static readonly double[][] PotentialMoments = [.. FieldMoments.Select(OverPower)];
 
     /// <summary>See <see cref="PanelIntegral.Evaluate"/>; x and y from the panel's middle, <paramref name="square"/> their squares' sum.</summary>
     public static void Evaluate(
@@ -21,60 +24,59 @@ internal static class FarPanelIntegral
         Vector512<double> square,
         Span<Vector512<double>> potential,
         Span<Vector512<double>> fieldRe,
-        Span<Vector512<double>> fieldIm)
+        Span<Vector512<double>> fieldIm,
+        Span<Vector512<double>> workspace)
     {
         var half = 0.5 * panel.Length;
-        var moments = Moments[(int)panel.Map - 1];
-        Span<Vector512<double>> powerRe = stackalloc Vector512<double>[Powers + 1];
-        Span<Vector512<double>> powerIm = stackalloc Vector512<double>[Powers + 1];
-        var (ratioRe, ratioIm) = (half * x / square, -half * y / square);
-        (powerRe[0], powerIm[0]) = potential.IsEmpty ? (ratioRe / half, ratioIm / half) : (Vector512.Create(1.0), Vector512<double>.Zero);
-        for (var k = 1; k <= Powers; k++)
+        var powers = PowersFor(half * half, square);
+        var powerRe = workspace[..(powers + 1)];
+        var powerIm = workspace.Slice(powers + 1, powers + 1);
+        var scale = Vector512.Create(half) / square;
+        var (ratioRe, ratioIm) = (x * scale, -y * scale);
+        var (re, im) = potential.IsEmpty ? (ratioRe / half, ratioIm / half) : (Vector512.Create(1.0), Vector512<double>.Zero);
+        for (var k = 0; k < powerRe.Length; k++)
         {
-            powerRe[k] = powerRe[k - 1] * ratioRe - powerIm[k - 1] * ratioIm;
-            powerIm[k] = powerRe[k - 1] * ratioIm + powerIm[k - 1] * ratioRe;
+            (powerRe[k], powerIm[k]) = (re, im);
+            (re, im) = (re * ratioRe - im * ratioIm, re * ratioIm + im * ratioRe);
         }
 
         if (potential.IsEmpty)
-            AddField(moments, panel.Terms, powerRe, powerIm, fieldRe, fieldIm);
-        else
-            AddPotential(moments, panel.Terms, 0.5 * Vector512.Log(square), powerRe, potential);
-    }
-
-    private static void AddPotential(
-        double[] moments, int terms, Vector512<double> log, Span<Vector512<double>> powerRe, Span<Vector512<double>> potential)
-    {
-        for (var n = 0; n < terms; n++)
         {
-            var row = n * (Powers + 1);
-            var sum = n == 0 ? log : Vector512<double>.Zero;
-            for (var k = 1; k <= Powers; k++)
-                sum -= powerRe[k] * (moments[row + k] / k);
-            potential[n] = sum;
-        }
-    }
-
-    private static void AddField(
-        double[] moments,
-        int terms,
-        Span<Vector512<double>> powerRe,
-        Span<Vector512<double>> powerIm,
-        Span<Vector512<double>> fieldRe,
-        Span<Vector512<double>> fieldIm)
-    {
-        for (var n = 0; n < terms; n++)
-        {
-            var row = n * (Powers + 1);
-            var (re, im) = (Vector512<double>.Zero, Vector512<double>.Zero);
-            for (var k = 0; k <= Powers; k++)
+            var moments = FieldMoments[(int)panel.Map - 1];
+            for (var n = 0; n < panel.Terms; n++)
             {
-                re += powerRe[k] * moments[row + k];
-                im += powerIm[k] * moments[row + k];
+                var row = moments.AsSpan(n * (Powers + 1), powerRe.Length);
+                fieldRe[n] = Sum(row, powerRe);
+                fieldIm[n] = Sum(row, powerIm);
             }
 
-            fieldRe[n] = re;
-            fieldIm[n] = im;
+            return;
         }
+
+        var overPower = PotentialMoments[(int)panel.Map - 1];
+        for (var n = 0; n < panel.Terms; n++)
+            potential[n] = Sum(overPower.AsSpan(n * (Powers + 1), powerRe.Length), powerRe);
+        potential[0] += 0.5 * Vector512.Log(square);
+    }
+
+    /// <summary>Fewer powers suffice farther away: half length over distance to their number stays below 1e-8.</summary>
+    private static int PowersFor(double halfSquare, Vector512<double> square) =>
+        Vector512.GreaterThanAll(square, Vector512.Create(2500 * halfSquare)) ? 4
+        : Vector512.GreaterThanAll(square, Vector512.Create(100 * halfSquare)) ? 7
+        : Vector512.GreaterThanAll(square, Vector512.Create(25 * halfSquare)) ? 10
+        : Powers;
+
+    private static Vector512<double> Sum(ReadOnlySpan<double> weights, ReadOnlySpan<Vector512<double>> values)
+    {
+        var (even, odd) = (Vector512<double>.Zero, Vector512<double>.Zero);
+        var k = 0;
+        for (; k + 1 < values.Length && k + 1 < weights.Length; k += 2)
+        {
+            even = Vector512.FusedMultiplyAdd(values[k], Vector512.Create(weights[k]), even);
+            odd = Vector512.FusedMultiplyAdd(values[k + 1], Vector512.Create(weights[k + 1]), odd);
+        }
+
+        return k < values.Length ? Vector512.FusedMultiplyAdd(values[k], Vector512.Create(weights[k]), even + odd) : even + odd;
     }
 
     /// <summary>∫ P_n(2u-1) (2u^m - 1)^k du for all n and k; the rule is exact for these degrees.</summary>
@@ -95,4 +97,8 @@ internal static class FarPanelIntegral
 
         return moments;
     }
+
+    /// <summary>The moments over minus their power, as the logarithm's series has them; its constant is the logarithm of the distance.</summary>
+    private static double[] OverPower(double[] moments) =>
+        [.. moments.Select((m, i) => i % (Powers + 1) == 0 ? 0 : -m / (i % (Powers + 1)))];
 }

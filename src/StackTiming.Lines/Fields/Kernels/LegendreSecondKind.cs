@@ -12,8 +12,18 @@ namespace StackTiming.Lines.Fields.Kernels;
 /// </summary>
 internal static class LegendreSecondKind
 {
-    // rho + 1/rho, the sum of the distances to both ends, at rho = 2.
-    private const double UpwardsBelow = 2.5;
+    // The sum of the distances to both ends is rho + 1/rho: 2.5 at rho = 2, from where on the continued fraction is short.
+    private const double DownwardsFrom = 2.5;
+
+    // Upwards while rho^n stays below a million, which costs six of sixteen digits.
+    private static readonly double[] UpwardsBelow = [.. Enumerable.Range(0, MaxLast + 1).Select(n => n == 0 ? 1e9 : Math.Pow(1e6, 1.0 / n) + Math.Pow(1e6, -1.0 / n))];
+
+    private static readonly double[] Rise = [.. Enumerable.Range(0, MaxLast + 1).Select(n => (2 * n + 1.0) / (n + 1))];
+
+    private static readonly double[] Fall = [.. Enumerable.Range(0, MaxLast + 1).Select(n => (double)n / (n + 1))];
+
+    /// <summary>Highest degree that can be asked for.</summary>
+    public const int MaxLast = 40;
 
     /// <summary>Fills the real and imaginary parts of Q_0 … Q_last and returns ln|z+1| + ln|z-1|.</summary>
     public static Vector512<double> Fill(
@@ -27,10 +37,10 @@ internal static class LegendreSecondKind
         qRe = 0.25 * (logPlus - logMinus);
         qIm = 0.5 * Lanes.Atan2(-2.0 * im, re * re + im * im - one);
         var focal = Vector512.Sqrt(plus) + Vector512.Sqrt(minus);
-        var limit = Vector512.Create(UpwardsBelow);
+        var limit = Vector512.Create(DownwardsFrom);
         if (last > 0)
         {
-            if (Vector512.LessThanAll(focal, limit))
+            if (Vector512.LessThanAll(focal, Vector512.Create(UpwardsBelow[last])))
                 Upwards(re, im, last, ref qRe, ref qIm);
             else if (!Vector512.LessThanAny(focal, limit))
                 Downwards(re, im, last, Extra(focal), ref qRe, ref qIm);
@@ -54,7 +64,7 @@ internal static class LegendreSecondKind
         Unsafe.Add(ref qIm, 1) = valueIm;
         for (var n = 1; n < last; n++)
         {
-            var (a, b) = ((2 * n + 1.0) / (n + 1), (double)n / (n + 1));
+            var (a, b) = (Rise[n], Fall[n]);
             var nextRe = a * (re * valueRe - im * valueIm) - b * beforeRe;
             var nextIm = a * (re * valueIm + im * valueRe) - b * beforeIm;
             (beforeRe, beforeIm, valueRe, valueIm) = (valueRe, valueIm, nextRe, nextIm);

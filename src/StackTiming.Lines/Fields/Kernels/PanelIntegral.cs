@@ -14,6 +14,9 @@ internal static class PanelIntegral
     /// <summary>Largest number of polynomials of a panel.</summary>
     public const int MaxTerms = 24;
 
+    /// <summary>Vectors of workspace that <see cref="Evaluate"/> needs.</summary>
+    public const int Workspace = 2 * (MaxTerms + 1);
+
     private const double HalfRootThree = 0.86602540378443864676;
 
     /// <summary>
@@ -26,7 +29,8 @@ internal static class PanelIntegral
         Vector512<double> y,
         Span<Vector512<double>> potential,
         Span<Vector512<double>> fieldRe,
-        Span<Vector512<double>> fieldIm)
+        Span<Vector512<double>> fieldIm,
+        Span<Vector512<double>> workspace)
     {
         if (panel.Map != PanelMap.Infinite)
         {
@@ -34,7 +38,7 @@ internal static class PanelIntegral
             var away = (x - Vector512.Create(half)) * (x - Vector512.Create(half)) + y * y;
             if (Vector512.GreaterThanAll(away, Vector512.Create(9 * half * half)))
             {
-                FarPanelIntegral.Evaluate(panel, x - Vector512.Create(half), y, away, potential, fieldRe, fieldIm);
+                FarPanelIntegral.Evaluate(panel, x - Vector512.Create(half), y, away, potential, fieldRe, fieldIm, workspace);
                 return;
             }
         }
@@ -46,16 +50,16 @@ internal static class PanelIntegral
         fieldIm.Clear();
         if (panel.Map == PanelMap.Straight)
         {
-            AddRoot(re, im, Vector512.Create(2 / panel.Length), Vector512<double>.Zero, terms, potential, fieldRe, fieldIm);
+            AddRoot(re, im, Vector512.Create(2 / panel.Length), Vector512<double>.Zero, terms, potential, fieldRe, fieldIm, workspace);
         }
         else if (panel.Map == PanelMap.Infinite)
         {
-            AddInfinite(re, im, panel.Length, terms, potential, fieldRe, fieldIm);
+            AddInfinite(re, im, panel.Length, terms, potential, fieldRe, fieldIm, workspace);
             return;
         }
         else
         {
-            AddRoots((int)panel.Map, re, im, panel.Length, terms, potential, fieldRe, fieldIm);
+            AddRoots((int)panel.Map, re, im, panel.Length, terms, potential, fieldRe, fieldIm, workspace);
         }
 
         if (!potential.IsEmpty)
@@ -63,7 +67,7 @@ internal static class PanelIntegral
     }
 
     private static void AddRoots(
-        int power, Vector512<double> re, Vector512<double> im, double length, int terms, Span<Vector512<double>> potential, Span<Vector512<double>> fieldRe, Span<Vector512<double>> fieldIm)
+        int power, Vector512<double> re, Vector512<double> im, double length, int terms, Span<Vector512<double>> potential, Span<Vector512<double>> fieldRe, Span<Vector512<double>> fieldIm, Span<Vector512<double>> workspace)
     {
         var square = Vector512.Max(re * re + im * im, Vector512.Create(1e-200));
         var radius = Vector512.Exp(Vector512.Log(square) * (0.5 / power));
@@ -75,7 +79,7 @@ internal static class PanelIntegral
         {
             var slopeRe = (rootRe * re + rootIm * im) * scale;
             var slopeIm = (rootIm * re - rootRe * im) * scale;
-            AddRoot(rootRe, rootIm, slopeRe, slopeIm, terms, potential, fieldRe, fieldIm);
+            AddRoot(rootRe, rootIm, slopeRe, slopeIm, terms, potential, fieldRe, fieldIm, workspace);
             (rootRe, rootIm) = power == 2
                 ? (-rootRe, -rootIm)
                 : (-0.5 * rootRe - HalfRootThree * rootIm, HalfRootThree * rootRe - 0.5 * rootIm);
@@ -101,10 +105,11 @@ internal static class PanelIntegral
         int terms,
         Span<Vector512<double>> potential,
         Span<Vector512<double>> fieldRe,
-        Span<Vector512<double>> fieldIm)
+        Span<Vector512<double>> fieldIm,
+        Span<Vector512<double>> workspace)
     {
-        Span<Vector512<double>> qRe = stackalloc Vector512<double>[terms + 1];
-        Span<Vector512<double>> qIm = stackalloc Vector512<double>[terms + 1];
+        var qRe = workspace[..(terms + 1)];
+        var qIm = workspace.Slice(terms + 1, terms + 1);
         var (re, im) = (2.0 * rootRe - Vector512.Create(1.0), 2.0 * rootIm);
         var logs = LegendreSecondKind.Fill(re, im, potential.IsEmpty ? terms - 1 : terms, ref qRe[0], ref qIm[0]);
         if (!potential.IsEmpty)
@@ -125,7 +130,7 @@ internal static class PanelIntegral
 
     /// <summary>∫ P_n ln|z - X/u| du = δ_n0 ln|z| + ∫ P_n ln|w - u| du - ∫ P_n ln u du with w = X/z.</summary>
     private static void AddInfinite(
-        Vector512<double> re, Vector512<double> im, double start, int terms, Span<Vector512<double>> potential, Span<Vector512<double>> fieldRe, Span<Vector512<double>> fieldIm)
+        Vector512<double> re, Vector512<double> im, double start, int terms, Span<Vector512<double>> potential, Span<Vector512<double>> fieldRe, Span<Vector512<double>> fieldIm, Span<Vector512<double>> workspace)
     {
         var square = Vector512.Max(re * re + im * im, Vector512.Create(1e-24));
         var (rootRe, rootIm) = (re / square, -im / square);
@@ -133,7 +138,7 @@ internal static class PanelIntegral
         var scale = -2 / start;
         var slopeRe = (rootRe * rootRe - rootIm * rootIm) * scale;
         var slopeIm = 2.0 * rootRe * rootIm * scale;
-        AddRoot(rootRe, rootIm, slopeRe, slopeIm, terms, potential, fieldRe, fieldIm);
+        AddRoot(rootRe, rootIm, slopeRe, slopeIm, terms, potential, fieldRe, fieldIm, workspace);
         if (!potential.IsEmpty)
         {
             potential[0] += 0.5 * Vector512.Log(square) + Vector512.Create(Math.Log(start));

@@ -13,6 +13,8 @@ namespace StackTiming.Lines.Fields.Kernels;
 /// <param name="height">b in metres.</param>
 internal sealed class ParallelPlates(double height)
 {
+    private const double Steepest = 60;
+
     private readonly double rate = Math.PI / (2 * height);
 
     /// <summary>Adds the potentials of the remaining images.</summary>
@@ -30,7 +32,8 @@ internal sealed class ParallelPlates(double height)
         Span<Vector512<double>> sums = stackalloc Vector512<double>[panel.Terms];
         var across = mirrored ? -1.0 : 1.0;
         ref var column = ref MemoryMarshal.GetReference(columns);
-        var sources = Sources(panel, rule, parts);
+        var centre = panel.At(0.5).Real;
+        var sources = Sources(panel, rule, parts, centre);
         for (var t = 0; t < points.Padded; t += Lanes.Count)
         {
             sums.Clear();
@@ -39,11 +42,12 @@ internal sealed class ParallelPlates(double height)
             var normalX = across * Vector512.Create<double>(points.NormalX.AsSpan(t));
             var normalY = Vector512.Create<double>(points.NormalY.AsSpan(t));
             var (sin, cos) = (Vector512.Sin(y * rate), Vector512.Cos(y * rate));
+            var growth = Growth(x - Vector512.Create(centre));
             foreach (var source in sources)
             {
                 var value = potentials
-                    ? -Potential(x, y, sin, cos, source)
-                    : Field(x, y, sin, cos, normalX, normalY, source);
+                    ? -Potential(x, y, sin, cos, growth, source)
+                    : Field(x, y, sin, cos, growth, normalX, normalY, source);
                 for (var n = 0; n < sums.Length; n++)
                     sums[n] += value * source.Weights[n];
             }
@@ -56,7 +60,7 @@ internal sealed class ParallelPlates(double height)
         }
     }
 
-    private Source[] Sources(Panel panel, LegendreRule rule, int parts)
+    private Source[] Sources(Panel panel, LegendreRule rule, int parts, double centre)
     {
         var sources = new Source[rule.Nodes.Length * parts];
         for (var i = 0; i < sources.Length; i++)
@@ -66,19 +70,19 @@ internal sealed class ParallelPlates(double height)
             for (var n = 0; n < weights.Length; n++)
                 weights[n] = rule.Weights[i % rule.Nodes.Length] / parts * LegendreRule.Polynomial(n, u);
             var point = panel.At(u);
-            sources[i] = new Source(point, Math.Sin(rate * point.Imaginary), Math.Cos(rate * point.Imaginary), weights);
+            sources[i] = new Source(point, Math.Exp(Math.Clamp(rate * (centre - point.Real), -Steepest, Steepest)), Math.Sin(rate * point.Imaginary), Math.Cos(rate * point.Imaginary), weights);
         }
 
         return sources;
     }
 
-    private Vector512<double> Potential(Vector512<double> x, Vector512<double> y, Vector512<double> sin, Vector512<double> cos, Source source)
+    private Vector512<double> Potential(Vector512<double> x, Vector512<double> y, Vector512<double> sin, Vector512<double> cos, Vector512<double> growth, Source source)
     {
         var dx = x - Vector512.Create(source.Point.Real);
         var down = y - Vector512.Create(source.Point.Imaginary);
         var up = y + Vector512.Create(source.Point.Imaginary);
         var beyond = up - Vector512.Create(2 * height);
-        var (sinh, _) = Hyperbolic(dx);
+        var (sinh, _) = Hyperbolic(growth * source.Growth);
         var square = sinh * sinh;
         var (sinDown, sinUp) = (sin * source.Cos - cos * source.Sin, sin * source.Cos + cos * source.Sin);
         // A point that is the source itself: both the true and the removed charge move away by the same nothing.
@@ -86,25 +90,27 @@ internal sealed class ParallelPlates(double height)
         var nearest = dx * dx + down * down + Vector512.Create(nothing);
         var direct = square + sinDown * sinDown + Vector512.Create(nothing * rate * rate);
         var image = square + sinUp * sinUp;
-        return 0.5 * Vector512.Log(direct / image * ((dx * dx + up * up) / nearest) * (dx * dx + beyond * beyond));
+        return 0.5 * Vector512.Log(direct * (dx * dx + up * up) * (dx * dx + beyond * beyond) / (image * nearest));
     }
 
     private Vector512<double> Field(
-        Vector512<double> x, Vector512<double> y, Vector512<double> sin, Vector512<double> cos, Vector512<double> normalX, Vector512<double> normalY, Source source)
+        Vector512<double> x, Vector512<double> y, Vector512<double> sin, Vector512<double> cos, Vector512<double> growth, Vector512<double> normalX, Vector512<double> normalY, Source source)
     {
         var dx = x - Vector512.Create(source.Point.Real);
         var down = y - Vector512.Create(source.Point.Imaginary);
         var up = y + Vector512.Create(source.Point.Imaginary);
         var beyond = up - Vector512.Create(2 * height);
-        var (sinh, cosh) = Hyperbolic(dx);
+        var (sinh, cosh) = Hyperbolic(growth * source.Growth);
         var square = sinh * sinh;
         var (sinDown, sinUp) = (sin * source.Cos - cos * source.Sin, sin * source.Cos + cos * source.Sin);
         var (cosDown, cosUp) = (cos * source.Cos + sin * source.Sin, cos * source.Cos - sin * source.Sin);
         var (imageSquare, beyondSquare) = (dx * dx + up * up, dx * dx + beyond * beyond);
+        var inverse = Vector512.Create(1.0) / (imageSquare * beyondSquare);
+        var (imageInverse, beyondInverse) = (beyondSquare * inverse, imageSquare * inverse);
         var imageScale = Vector512.Create(rate) / (square + sinUp * sinUp);
         var (re, im) = NearestRemainder(dx, down, sinh, cosh, sinDown, cosDown);
-        re += -sinh * cosh * imageScale + dx / imageSquare + dx / beyondSquare;
-        im += sinUp * cosUp * imageScale - up / imageSquare - beyond / beyondSquare;
+        re += dx * (imageInverse + beyondInverse) - sinh * cosh * imageScale;
+        im += sinUp * cosUp * imageScale - up * imageInverse - beyond * beyondInverse;
         return re * normalX - im * normalY;
     }
 
@@ -122,14 +128,15 @@ internal sealed class ParallelPlates(double height)
             Vector512.ConditionalSelect(near, down * third, down / safe - sinDown * cosDown * scale));
     }
 
-    private (Vector512<double> Sinh, Vector512<double> Cosh) Hyperbolic(Vector512<double> dx)
+    /// <summary>e^(κx), bounded: where it is that large or small, sinh and cosh are equal to the last digit.</summary>
+    private Vector512<double> Growth(Vector512<double> x) =>
+        Vector512.Exp(Vector512.Min(Vector512.Max(x * rate, Vector512.Create(-Steepest)), Vector512.Create(Steepest)));
+
+    private static (Vector512<double> Sinh, Vector512<double> Cosh) Hyperbolic(Vector512<double> growth)
     {
-        // Beyond e^80 both ratios are one to the last digit; the bound keeps their squares finite.
-        var argument = Vector512.Min(Vector512.Max(dx * rate, Vector512.Create(-80.0)), Vector512.Create(80.0));
-        var growth = Vector512.Exp(argument);
         var decay = Vector512.Create(1.0) / growth;
         return (0.5 * (growth - decay), 0.5 * (growth + decay));
     }
 
-    private readonly record struct Source(Complex Point, double Sin, double Cos, double[] Weights);
+    private readonly record struct Source(Complex Point, double Growth, double Sin, double Cos, double[] Weights);
 }

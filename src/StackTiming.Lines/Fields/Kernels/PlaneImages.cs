@@ -57,6 +57,7 @@ internal sealed class PlaneImages(bool hasPlane, double? topPlane)
     {
         Span<Vector512<double>> first = stackalloc Vector512<double>[panel.Terms];
         Span<Vector512<double>> second = stackalloc Vector512<double>[panel.Terms];
+        Span<Vector512<double>> workspace = stackalloc Vector512<double>[PanelIntegral.Workspace];
         var (cos, sin) = (panel.Direction.Real, panel.Direction.Imaginary);
         var across = mirrored ? -1.0 : 1.0;
         ref var column = ref MemoryMarshal.GetReference(columns);
@@ -67,13 +68,13 @@ internal sealed class PlaneImages(bool hasPlane, double? topPlane)
             var (localX, localY) = (x * cos + y * sin, y * cos - x * sin);
             if (potentials)
             {
-                PanelIntegral.Evaluate(panel, localX, localY, first, default, default);
+                PanelIntegral.Evaluate(panel, localX, localY, first, default, default, workspace);
                 for (var n = 0; n < panel.Terms; n++)
                     Accumulate(ref column, n * stride + t, first[n] * sign);
                 continue;
             }
 
-            PanelIntegral.Evaluate(panel, localX, localY, default, first, second);
+            PanelIntegral.Evaluate(panel, localX, localY, default, first, second, workspace);
             var normalX = across * Vector512.Create<double>(points.NormalX.AsSpan(t)) * sign;
             var normalY = upright * Vector512.Create<double>(points.NormalY.AsSpan(t)) * sign;
             var (localNormalX, localNormalY) = (normalX * cos + normalY * sin, normalY * cos - normalX * sin);

@@ -96,7 +96,7 @@ internal sealed class PanelMesh
     private void Refine(Panel panel)
     {
         var ellipse = NearestEllipse(panel);
-        if (ellipse >= degrees.SmallestEllipse)
+        if (ellipse >= degrees.SmallestEllipse(panel))
         {
             panels.Add(panel with { Terms = degrees.Terms(panel, ellipse) });
             if (panels.Count > MostPanels)
