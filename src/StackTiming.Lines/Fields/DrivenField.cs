@@ -1,7 +1,6 @@
 using StackTiming.Lines.Fields.Geometry;
 using StackTiming.Lines.Fields.Kernels;
 using StackTiming.Lines.Fields.Panels;
-using StackTiming.Lines.Fields.Systems;
 
 namespace StackTiming.Lines.Fields;
 
@@ -14,35 +13,17 @@ public sealed class DrivenField
     private const int Chunk = 256;
 
     private readonly SectionFrame frame;
-    private readonly Panel[] panels;
     private readonly PlaneImages images;
-    private readonly (int Parity, double[] Coefficients)[] parts;
-    private readonly int panelCount;
-    private readonly double offset;
+    private readonly SolvedDrive drive;
 
-    internal DrivenField(FieldSolution solution, ParityCharges[] charges, double[] volts)
-    {
-        (frame, panels, images) = (solution.Frame, solution.Mesh.Panels, solution.Mesh.Images);
-        parts = [.. charges.Select(c => (c.Parity, c.Superpose(volts)))];
-        var unknowns = 0;
-        foreach (var panel in panels)
-        {
-            // In air only conductors carry charge; in open space the last number is the potential far away.
-            if (unknowns + panel.Terms > parts[0].Coefficients.Length)
-                break;
-            unknowns += panel.Terms;
-            panelCount++;
-        }
-
-        foreach (var (parity, coefficients) in parts)
-            offset += parity >= 0 && coefficients.Length > unknowns ? coefficients[unknowns] : 0;
-    }
+    internal DrivenField(SectionFrame frame, PlaneImages images, SolvedDrive drive) =>
+        (this.frame, this.images, this.drive) = (frame, images, drive);
 
     /// <summary>Potentials in volts at points given in metres.</summary>
     public double[] PotentialVolts(ReadOnlySpan<double> xMetres, ReadOnlySpan<double> yMetres)
     {
         var volts = new double[xMetres.Length];
-        Array.Fill(volts, offset);
+        Array.Fill(volts, drive.Offset);
         for (var start = 0; start < volts.Length; start += Chunk)
         {
             var points = Points(xMetres, yMetres, start, 0, 0);
@@ -86,19 +67,16 @@ public sealed class DrivenField
     {
         var columns = new double[PanelIntegral.MaxTerms * points.Padded];
         var first = 0;
-        for (var p = 0; p < panelCount; p++)
+        foreach (var panel in drive.Panels)
         {
-            var panel = panels[p];
             var used = columns.AsSpan(0, panel.Terms * points.Padded);
-            for (var side = 0; side < (parts[0].Parity == 0 ? 1 : 2); side++)
+            for (var side = 0; side < (drive.Mirrored ? 2 : 1); side++)
             {
                 used.Clear();
                 add(panel, side == 1, used);
                 for (var n = 0; n < panel.Terms; n++)
                 {
-                    var charge = 0.0;
-                    foreach (var (parity, coefficients) in parts)
-                        charge += (side == 1 ? parity : 1) * coefficients[first + n];
+                    var charge = drive.Coefficient(first + n, side == 1);
                     for (var i = 0; i < points.Count; i++)
                         target[start + i] += charge * columns[n * points.Padded + i];
                 }

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using StackTiming.Lines.Constants;
 using StackTiming.Lines.Fields.Systems;
 using StackTiming.Lines.Sections;
 using StackTiming.Lines.Solutions;
@@ -47,5 +48,43 @@ internal static class EnergyPicture
                 .GroupBy(m => media[m].Name)
                 .Select(g => new DielectricShare(g.Key, g.Sum(m => media[m].Dk * slopes[m] / energy)))
         ];
+    }
+
+    /// <summary>
+    /// The derivative of the capacitance matrix (F/m) with respect to the permittivity of the materials of one name, from the energies of single and paired drives.
+    /// </summary>
+    public static double[,] CapacitanceSlope(SolvedMesh mesh, ConductorPairs pairs, IReadOnlyList<SectionDielectric> media, string name)
+    {
+        var slope = new double[pairs.Signals, pairs.Signals];
+        var volts = new double[pairs.Signals];
+        for (var i = 0; i < pairs.Signals; i++)
+        {
+            volts[i] = 1;
+            slope[i, i] = EnergySlope(mesh, pairs, media, name, volts);
+            volts[i] = 0;
+        }
+
+        for (var i = 0; i < pairs.Signals; i++)
+        {
+            for (var j = 0; j < i; j++)
+            {
+                (volts[i], volts[j]) = (1, 1);
+                slope[i, j] = slope[j, i] = (EnergySlope(mesh, pairs, media, name, volts) - slope[i, i] - slope[j, j]) / 2;
+                (volts[i], volts[j]) = (0, 0);
+            }
+        }
+
+        return slope;
+    }
+
+    private static double EnergySlope(
+        SolvedMesh mesh, ConductorPairs pairs, IReadOnlyList<SectionDielectric> media, string name, ReadOnlySpan<double> signalVolts)
+    {
+        var slopes = new double[media.Count];
+        var halves = mesh.Filled[0].Parity == 0 ? 1 : 2;
+        var volts = pairs.Volts(signalVolts);
+        foreach (var part in mesh.Filled)
+            part.AddEnergy(volts, slopes);
+        return Enumerable.Range(0, media.Count).Where(m => media[m].Name == name).Sum(m => slopes[m]) * halves * 2 * Math.PI * Vacuum.Epsilon0;
     }
 }

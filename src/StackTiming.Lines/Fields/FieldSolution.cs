@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using StackTiming.Lines.Constants;
 using StackTiming.Lines.Fields.Geometry;
 using StackTiming.Lines.Fields.Systems;
 using StackTiming.Lines.Sections;
@@ -45,11 +46,16 @@ public sealed class FieldSolution
         return EnergyPicture.Shares(Mesh, pairs, surfaces.Regions.Media, signalVolts);
     }
 
+    /// <summary>The derivative of the capacitance matrix with respect to the relative permittivity of a material, F/m; exact on this mesh.</summary>
+    /// <param name="dielectric">Name of the material.</param>
+    public double[,] CapacitanceSlope(string dielectric) =>
+        EnergyPicture.CapacitanceSlope(Mesh, pairs, surfaces.Regions.Media, dielectric);
+
     /// <summary>The electric field when the signals have these voltages.</summary>
     public DrivenField Drive(ReadOnlySpan<double> signalVolts)
     {
         CheckSignals(signalVolts.Length);
-        return new DrivenField(this, Mesh.Filled, pairs.Volts(signalVolts));
+        return Field(Mesh.Filled, signalVolts);
     }
 
     /// <summary>
@@ -59,8 +65,28 @@ public sealed class FieldSolution
     public DrivenField DriveInAir(ReadOnlySpan<double> signalVolts)
     {
         CheckSignals(signalVolts.Length);
-        return new DrivenField(this, Mesh.Empty, pairs.Volts(signalVolts));
+        return Field(Mesh.Empty, signalVolts);
     }
+
+    /// <summary>The charges in air that carry these signal currents, in amperes, at the speed of light.</summary>
+    internal SolvedDrive Carry(ReadOnlySpan<double> signalAmperes)
+    {
+        CheckSignals(signalAmperes.Length);
+        // L I = V/c, so that the charges C0 V are I/c.
+        var volts = new double[pairs.Signals];
+        for (var i = 0; i < volts.Length; i++)
+        {
+            for (var j = 0; j < volts.Length; j++)
+                volts[i] += Vacuum.SpeedOfLight * Line.InductanceHenryPerMetre[i, j] * signalAmperes[j];
+        }
+
+        return new SolvedDrive(Mesh.Panels, Mesh.Empty, pairs.Volts(volts));
+    }
+
+    internal DrivenField Field(SolvedDrive drive) => new(frame, Mesh.Images, drive);
+
+    private DrivenField Field(ParityCharges[] charges, ReadOnlySpan<double> signalVolts) =>
+        Field(new SolvedDrive(Mesh.Panels, charges, pairs.Volts(signalVolts)));
 
     private void CheckSignals(int count)
     {

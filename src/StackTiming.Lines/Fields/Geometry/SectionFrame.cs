@@ -56,8 +56,10 @@ internal readonly record struct SectionFrame(double OriginX, double OriginY, boo
         return -1;
     }
 
+    /// <summary>True where a conductor is its own mirror image, or the image of another that it does not touch.</summary>
     private static bool HasTwin(CrossSection section, SectionConductor c, double axis, double tolerance) =>
-        section.Conductors.Any(other => IsTwin(c, other, axis, tolerance));
+        section.Conductors.Any(other => IsTwin(c, other, axis, tolerance))
+        && (Math.Abs(c.CentreMetres - axis) <= tolerance / 2 || Math.Abs(c.CentreMetres - axis) > c.WideMetres / 2 + tolerance);
 
     private static bool IsTwin(SectionConductor a, SectionConductor b, double axis, double tolerance) =>
         a.Grounded == b.Grounded

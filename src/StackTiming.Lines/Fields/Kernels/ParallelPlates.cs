@@ -27,11 +27,14 @@ internal sealed class ParallelPlates(double height)
 
     private void Add(Panel panel, ChargePoints points, bool mirrored, bool potentials, Span<double> columns, int stride)
     {
-        var parts = (int)Math.Ceiling(panel.Length / (1.5 * height));
+        // At the far end of a mapped panel u runs as many times faster as the map has powers.
+        var parts = (int)Math.Ceiling((int)panel.Map * panel.Length / (1.5 * height));
         var rule = LegendreRule.Of(Math.Max(panel.Terms, 4) + (parts > 1 ? 4 : 2));
         Span<Vector512<double>> sums = stackalloc Vector512<double>[panel.Terms];
         var across = mirrored ? -1.0 : 1.0;
         ref var column = ref MemoryMarshal.GetReference(columns);
+        // The growth splits into those of point and source while neither meets its bound.
+        var isLong = rate * panel.Length > Steepest / 2;
         var centre = panel.At(0.5).Real;
         var sources = Sources(panel, rule, parts, centre);
         for (var t = 0; t < points.Padded; t += Lanes.Count)
@@ -42,9 +45,10 @@ internal sealed class ParallelPlates(double height)
             var normalX = across * Vector512.Create<double>(points.NormalX.AsSpan(t));
             var normalY = Vector512.Create<double>(points.NormalY.AsSpan(t));
             var (sin, cos) = (Vector512.Sin(y * rate), Vector512.Cos(y * rate));
-            var growth = Growth(x - Vector512.Create(centre));
+            var fromCentre = Growth(x - Vector512.Create(centre));
             foreach (var source in sources)
             {
+                var growth = isLong ? Growth(x - Vector512.Create(source.Point.Real)) : fromCentre * source.Growth;
                 var value = potentials
                     ? -Potential(x, y, sin, cos, growth, source)
                     : Field(x, y, sin, cos, growth, normalX, normalY, source);
@@ -82,7 +86,7 @@ internal sealed class ParallelPlates(double height)
         var down = y - Vector512.Create(source.Point.Imaginary);
         var up = y + Vector512.Create(source.Point.Imaginary);
         var beyond = up - Vector512.Create(2 * height);
-        var (sinh, _) = Hyperbolic(growth * source.Growth);
+        var (sinh, _) = Hyperbolic(growth);
         var square = sinh * sinh;
         var (sinDown, sinUp) = (sin * source.Cos - cos * source.Sin, sin * source.Cos + cos * source.Sin);
         // A point that is the source itself: both the true and the removed charge move away by the same nothing.
@@ -100,7 +104,7 @@ internal sealed class ParallelPlates(double height)
         var down = y - Vector512.Create(source.Point.Imaginary);
         var up = y + Vector512.Create(source.Point.Imaginary);
         var beyond = up - Vector512.Create(2 * height);
-        var (sinh, cosh) = Hyperbolic(growth * source.Growth);
+        var (sinh, cosh) = Hyperbolic(growth);
         var square = sinh * sinh;
         var (sinDown, sinUp) = (sin * source.Cos - cos * source.Sin, sin * source.Cos + cos * source.Sin);
         var (cosDown, cosUp) = (cos * source.Cos + sin * source.Sin, cos * source.Cos - sin * source.Sin);
