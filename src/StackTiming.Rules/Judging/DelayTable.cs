@@ -101,7 +101,7 @@ public sealed record Comparison(string From, string To, ImmutableArray<ReceiverD
     /// <summary>Names a delay: its net, and its driver and receiver where there are several.</summary>
     /// <param name="delay">One of the delays.</param>
     public string SubjectOf(ReceiverDelay delay) =>
-        To.Length == 0 ? delay.Driven.Net : $"{delay.Driven.Net} from {delay.Driven.Driver} at {delay.Path.Receiver}";
+        To.Length == 0 ? delay.Driven.Net : $"{delay.Driven.Net} from {delay.Driven.Driver} to {delay.Path.Receiver}";
 }
 
 /// <summary>Which delays a rule looks at.</summary>

@@ -129,7 +129,7 @@ public sealed record ImpedanceRule(
         var explanation = $"{subject} has {(differential ? "a differential impedance" : "an impedance")} of {unit.Show(worst.Ohms)} {where}, {of}; allowed is {LimitText}.";
         var fix = Judgement.Holds(worst.Ohms, Allowed) ? null : FixOf(board, subject, worst, differential);
         judgement.Measured(
-            subject, nets, worst.Ohms, Allowed, unit, $"{worst.Line.Solution.MethodId} (±{DisplayUnit.Percent.Show(worst.Line.Solution.RelativeError)})", explanation, fix);
+            subject, nets, worst.Ohms, Allowed, unit, MethodText(worst.Line), explanation, fix);
     }
 
     private Fix? FixOf(IBoardPhysics board, string subject, Worst worst, bool differential)
@@ -147,6 +147,10 @@ public sealed record ImpedanceRule(
             $"route {subject} on {segment.Layer} {DisplayUnit.Millimetres.Show(width)} wide instead of {DisplayUnit.Millimetres.Show(segment.WidthMetres)}{gap} for {DisplayUnit.Ohms.Show(Target.Value)}",
             subject, segment.Layer, width);
     }
+
+    private static string MethodText(BoardLine line) => line.Solution.RelativeError > 0
+        ? $"{line.Solution.MethodId} (±{DisplayUnit.Percent.Show(line.Solution.RelativeError)})"
+        : line.Solution.MethodId;
 
     private static string Where(in Segment segment, bool differential)
     {

@@ -130,7 +130,7 @@ internal sealed class TinyBoard : IBoardPhysics
             ["a"], "arithmetic", new[,] { { slope / ohms } }, new[,] { { slope * ohms } }, [], 0.01, []);
         const double c = 299_792_458.0;
         var eps = slope * c * slope * c;
-        return new BoardLine(key, solution, key.GapMetres > 0 ? new PairModes(1.8 * ohms, 0.6 * ohms, eps, eps, true) : null);
+        return new BoardLine(key, solution, key.GapMetres > 0 ? new PairModes(1.8 * ohms, 0.6 * ohms, eps, eps, true) : null, null);
     }
 
     private static CopperLayer Copper(string name, CopperUse use) => new(

@@ -1,0 +1,92 @@
+using System.Collections.Immutable;
+using StackTiming.Rules.Results;
+using StackTiming.Stackups.Reading;
+
+namespace StackTiming.Rules.Boards;
+
+/// <summary>
+/// The files that a board consists of: finds them relative to the file that names them, reads each once, and keeps their digests.
+/// </summary>
+/// <param name="boardPath">Path of the board file as the user wrote it.</param>
+/// <param name="problems">Where problems go.</param>
+public sealed class BoardFiles(string boardPath, ProblemList problems)
+{
+    private readonly string home = Folder(Path.GetFullPath(boardPath));
+    private readonly Dictionary<string, InputFile?> loaded = new(StringComparer.Ordinal);
+    private readonly Dictionary<string, DataMap?> parsed = new(StringComparer.Ordinal);
+    private readonly HashSet<string> reported = new(StringComparer.Ordinal);
+    private readonly List<InputDigest> digests = [];
+
+    /// <summary>The files read so far, in the order of reading.</summary>
+    public ImmutableArray<InputDigest> Digests => [.. digests];
+
+    /// <summary>
+    /// The path of a file as messages show it, from the path that another file gives. A file outside the board's folder is noted, once.
+    /// </summary>
+    /// <param name="path">The path as written, relative to the file that names it.</param>
+    /// <param name="from">Where it is written.</param>
+    /// <returns>The path, or null with a problem.</returns>
+    public string? Resolve(string path, FilePosition from)
+    {
+        if (string.IsNullOrWhiteSpace(path) || path.Contains('\0', StringComparison.Ordinal))
+        {
+            problems.Error(from, "the path is empty", "write the path of a file, relative to this one");
+            return null;
+        }
+        var shown = Path.IsPathRooted(path) ? path : Normal(Path.Combine(Folder(from.File), path));
+        var full = Path.GetFullPath(shown);
+        if (!full.StartsWith(home, StringComparison.Ordinal) && reported.Add(full))
+            problems.Note(from, $"'{Suggestion.Shorten(path)}' lies outside the board's folder", "keep the file with the board when you archive it");
+        return shown;
+    }
+
+    /// <summary>Reads a file.</summary>
+    /// <param name="shown">Its path, from <see cref="Resolve"/>.</param>
+    /// <param name="from">Where it is named.</param>
+    /// <param name="role">What it is, for the list of inputs.</param>
+    /// <returns>The file, or null with a problem.</returns>
+    public InputFile? Load(string shown, FilePosition from, string role)
+    {
+        var full = Path.GetFullPath(shown);
+        if (loaded.TryGetValue(full, out var before))
+            return before;
+        var file = InputFileLoader.Load(shown, from, problems);
+        loaded[full] = file;
+        if (file is not null)
+            digests.Add(new InputDigest(role, file.Path, file.Sha256));
+        return file;
+    }
+
+    /// <summary>Reads a structured file whose content is a mapping.</summary>
+    /// <param name="shown">Its path, from <see cref="Resolve"/>.</param>
+    /// <param name="from">Where it is named.</param>
+    /// <param name="role">What it is, for the list of inputs.</param>
+    /// <returns>The mapping, or null with a problem.</returns>
+    public DataMap? Yaml(string shown, FilePosition from, string role)
+    {
+        var full = Path.GetFullPath(shown);
+        if (parsed.TryGetValue(full, out var before))
+            return before;
+        var map = Load(shown, from, role) is { } file ? YamlDocument.ReadMap(file, problems) : null;
+        parsed[full] = map;
+        return map;
+    }
+
+    private static string Folder(string path) => Path.GetDirectoryName(path) ?? "";
+
+    /// <summary>Takes <c>x/..</c> out of a relative path, so that messages stay short; leading <c>..</c> remain.</summary>
+    private static string Normal(string path)
+    {
+        if (Path.IsPathRooted(path))
+            return Path.GetFullPath(path);
+        var parts = new List<string>();
+        foreach (var part in path.Split('/', '\\'))
+        {
+            if (part == ".." && parts.Count > 0 && parts[^1] != "..")
+                parts.RemoveAt(parts.Count - 1);
+            else if (part.Length > 0 && part != ".")
+                parts.Add(part);
+        }
+        return string.Join('/', parts);
+    }
+}
