@@ -19,7 +19,7 @@ internal sealed class PartReader(IReadOnlyDictionary<string, BufferModel?> model
         foreach (var entry in map.Named("pins"))
             ReadPins(entry, map, pins);
         var joins = ReadJoins(name, map, pins);
-        if (!map.Has("pins") && joins.IsEmpty)
+        if (!map.Has("pins") && !map.Has("joins"))
             map.Problems.Error(map.At, $"the part '{Suggestion.Shorten(name)}' has neither pins nor joins", "write pins: { 1: { model: … } } or joins: [1, 2]");
         map.Finish();
         return new Part(name, map.At, pins.ToFrozenDictionary(StringComparer.Ordinal), joins);
