@@ -12,7 +12,7 @@ namespace StackTiming.Rules.RuleFiles;
 public sealed class RuleFileReader(BoardFiles files, ProblemList problems)
 {
     /// <summary>Most rules that a board may have, so that sets which use each other cannot grow without end.</summary>
-    public const int MostRules = 100_000;
+    public const int MostRules = 20_000;
 
     private readonly List<RuleEntry> entries = [];
     private readonly List<RuleScope> scopes = [];
