@@ -2,7 +2,10 @@ using StackTiming.Waves.Networks;
 
 namespace StackTiming.Waves.Characteristics;
 
-/// <summary>Chooses the time step: a whole fraction of the shortest ramp, so that its corners fall on steps.</summary>
+/// <summary>
+/// Chooses the time step: a whole fraction of the shortest ramp, so that its corners fall on steps. Lines shorter than a step do not shorten it: to an
+/// edge a hundred times as long they are as good as their inductance and capacitance. Coupled lines, which cannot be lumped, do.
+/// </summary>
 internal static class StepChoice
 {
     /// <summary>The step in seconds.</summary>
@@ -10,13 +13,6 @@ internal static class StepChoice
     {
         var ramp = network.Stimulus.ShortestRampSeconds;
         var wanted = ramp / options.StepsPerRamp;
-        // A quarter of the shortest delay keeps interpolation inside the line, but a via need not slow the whole net down: below an
-        // eighth of the wanted step a line is as good as its inductance and capacitance.
-        foreach (var line in network.Lines)
-        {
-            if (line.DelaySeconds >= wanted / 8)
-                wanted = Math.Min(wanted, Math.Max(line.DelaySeconds / 4, wanted / 4));
-        }
         foreach (var group in network.CoupledLines)
         {
             foreach (var mode in group.Modes)

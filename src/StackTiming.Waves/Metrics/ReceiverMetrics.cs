@@ -45,4 +45,7 @@ public sealed record ReceiverMetrics
     /// swing in half a ramp), as it would while waiting for a reflection.
     /// </summary>
     public bool? FirstIncident { get; init; }
+
+    /// <summary>The voltage that the first wave brings: where the first rise from its first movement comes to its first pause, V.</summary>
+    public double? FirstWaveVolts { get; init; }
 }

@@ -36,6 +36,7 @@ public static class WaveformMetrics
         var swing = Math.Abs(voltage.FinalVolts - voltage.InitialVolts);
         var firstMid = FirstCrossing(voltage, stepSeconds, t.MidVolts, stimulus.EndsHigh);
         var firstVih = trace.FirstRise(judged);
+        var pause = trace.FirstPause(0.5 * stimulus.ShortestRampSeconds, PauseShare * swing);
         return levels with
         {
             FirstMidSeconds = firstMid,
@@ -45,7 +46,8 @@ public static class WaveformMetrics
             RingbackVolts = sign * trace.Ringback(firstVih, RingbackShare * swing),
             SettleSeconds = trace.LastOutside(SettlingShare * swing),
             FlightTimeSeconds = firstMid - referenceMidSeconds,
-            FirstIncident = firstVih is { } crossing && !trace.Pauses(crossing, 0.5 * stimulus.ShortestRampSeconds, PauseShare * swing),
+            FirstIncident = firstVih is { } crossing && crossing <= trace.SecondsOf(pause),
+            FirstWaveVolts = trace.VoltsOf(pause),
         };
     }
 
@@ -116,20 +118,24 @@ public static class WaveformMetrics
             return 0;
         }
 
-        public bool Pauses(double crossing, double spanSeconds, double rise)
+        /// <summary>The first sample from which the voltage rises by less than a share in a span, once it has begun to rise; the last where there is none.</summary>
+        public int FirstPause(double spanSeconds, double rise)
         {
             var span = Math.Max(1, (int)(spanSeconds / step));
-            var end = Math.Min(volts.Length - 1, (int)(crossing / step));
             var start = 0;
-            while (start < end && At(start) - At(0) < rise)
+            while (start < volts.Length - 1 && At(start) - At(0) < rise)
                 start++;
-            for (var i = start; i + span <= end; i++)
+            for (var i = start; i + span < volts.Length; i++)
             {
                 if (At(i + span) - At(i) < rise)
-                    return true;
+                    return i;
             }
-            return false;
+            return volts.Length - 1;
         }
+
+        public double SecondsOf(int i) => i * step;
+
+        public double VoltsOf(int i) => sign * At(i);
 
         private double Crossing(int i, double level) => step * (i - 1 + ((level - At(i - 1)) / (At(i) - At(i - 1))));
     }
