@@ -82,7 +82,10 @@ internal static class StripModel
         return (c.CentreMetres + (signalsRight ? 0.5 : -0.5) * cut, cut);
     }
 
-    private static double GapBeside(SectionConductor c, CrossSection section)
+    /// <summary>Distance from a conductor to the nearest other one beside it, metres; infinite where there is none.</summary>
+    /// <param name="c">The conductor.</param>
+    /// <param name="section">Its section.</param>
+    public static double GapBeside(SectionConductor c, CrossSection section)
     {
         var least = double.PositiveInfinity;
         foreach (var other in section.Conductors)

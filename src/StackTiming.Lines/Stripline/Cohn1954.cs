@@ -24,6 +24,9 @@ public sealed class Cohn1954 : IClosedForm
     }
 
     /// <inheritdoc/>
+    public bool Suits(CrossSection section) => true;
+
+    /// <inheritdoc/>
     public LineSolution Calculate(CrossSection section)
     {
         var trace = section.Conductors[0];
