@@ -10,7 +10,7 @@ namespace StackTiming.Nets.Names;
 public sealed class NamePattern
 {
     /// <summary>Most names that ranges may stand for.</summary>
-    public const int MostAlternatives = 100_000;
+    public const int MostAlternatives = 1_000_000;
 
     private NamePattern(string text, ImmutableArray<string> alternatives)
     {
