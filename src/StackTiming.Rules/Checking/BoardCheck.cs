@@ -25,6 +25,7 @@ public static class BoardCheck
         var physics = new BoardPhysics(board, options.Calculator, lines);
         var needs = NeedsOf(board);
         TracePaths(physics, needs, clock);
+        clock.Run("waves", 0, "waveforms", _ => { });
         var judgements = Judge(board, physics, clock);
         var lineUses = CheckTables.Lines(board, lines);
 

@@ -6,16 +6,14 @@ namespace StackTiming.Rules.Judging;
 public static class PathLength
 {
     /// <summary>
-    /// How to change the delay of a way: on the layer of its longest trace of the net, by the delay per metre that this trace has.
+    /// How to change the delay of a way: on the layer of its longest trace, by the delay per metre that this trace has.
     /// </summary>
     /// <param name="path">The way.</param>
-    /// <param name="net">The net that may be changed.</param>
     /// <param name="seconds">Wanted change of delay: positive to add.</param>
-    /// <returns>The fix, or null where the net has no trace on the way, or not enough of it to take away.</returns>
-    public static Fix? Change(ReceiverPath path, string net, double seconds)
+    /// <returns>The fix, or null where the way has no trace.</returns>
+    public static Fix? Change(ReceiverPath path, double seconds)
     {
-        var longest = LongestTrace(path, net);
-        if (longest is not { } trace || seconds == 0)
+        if (LongestTrace(path) is not { } trace || seconds == 0)
             return null;
         var perMetre = trace.DelaySeconds / trace.LengthMetres;
         var metres = Math.Abs(seconds) / perMetre;
@@ -32,16 +30,16 @@ public static class PathLength
     public static string Slope(double secondsPerMetre) =>
         (secondsPerMetre * 1e9).ToString("F3", System.Globalization.CultureInfo.InvariantCulture) + " ps/mm";
 
-    private static PathPiece? LongestTrace(ReceiverPath path, string net)
+    /// <summary>The longest trace of a way, or null where it has none.</summary>
+    /// <param name="path">The way.</param>
+    public static PathPiece? LongestTrace(ReceiverPath path)
     {
-        PathPiece? best = null;
+        PathPiece? longest = null;
         foreach (var piece in path.Pieces)
         {
-            if (piece.Kind != PieceKind.Trace || piece.LengthMetres <= 0)
-                continue;
-            if (best is null || (piece.Net == net) != (best.Value.Net == net) ? piece.Net == net || best is null : piece.LengthMetres > best.Value.LengthMetres)
-                best = piece;
+            if (piece.Kind == PieceKind.Trace && piece.LengthMetres > (longest?.LengthMetres ?? 0))
+                longest = piece;
         }
-        return best;
+        return longest;
     }
 }

@@ -10,12 +10,12 @@ public static class SeriesTermination
 {
     private const double LeastOhms = 2;
 
-    /// <summary>The fix for a net that rings.</summary>
+    /// <summary>The fix for a net that rings; the longest trace is what the driver has to match, a short breakout before it hardly counts.</summary>
     /// <param name="driven">The net from its driver.</param>
     /// <param name="path">The way to the receiver that rings.</param>
     public static Fix? Of(DrivenNet driven, ReceiverPath path)
     {
-        if (driven.Model is not { } model || LongestLine(path) is not { } line)
+        if (driven.Model is not { } model || PathLength.LongestTrace(path) is not { } line)
             return null;
         var source = model.Resistance.Value;
         var missing = line.Z0Ohms - source - driven.SeriesOhms;
@@ -39,21 +39,9 @@ public static class SeriesTermination
 
     /// <summary>Impedance of the longest trace of a way, ohm; NaN where it has none.</summary>
     /// <param name="path">The way.</param>
-    public static double LineOhms(ReceiverPath path) => LongestLine(path)?.Z0Ohms ?? double.NaN;
+    public static double LineOhms(ReceiverPath path) => PathLength.LongestTrace(path)?.Z0Ohms ?? double.NaN;
 
     /// <summary>A resistance as text.</summary>
     /// <param name="ohms">Resistance, ohm.</param>
     public static string Show(double ohms) => ohms.ToString("F1", System.Globalization.CultureInfo.InvariantCulture) + " ohm";
-
-    private static PathPiece? LongestLine(ReceiverPath path)
-    {
-        // The longest trace is what the driver has to match; a short breakout before it hardly counts.
-        PathPiece? longest = null;
-        foreach (var piece in path.Pieces)
-        {
-            if (piece.Kind == PieceKind.Trace && double.IsFinite(piece.Z0Ohms) && (longest is null || piece.LengthMetres > longest.Value.LengthMetres))
-                longest = piece;
-        }
-        return longest;
-    }
 }

@@ -40,7 +40,7 @@ public sealed record FlightTimeRule(RuleHeader Header, NetSet Nets, Window Allow
     public override void Judge(IBoardPhysics board, Judgement judgement)
     {
         var entries = ImmutableArray.CreateBuilder<NetDelay>();
-        foreach (var net in Nets.Names)
+        foreach (var (net, _, _) in JudgedNet.Of(board, Nets.Names, Query.Drive))
         {
             // Net by net: a receiver without a threshold on one net must not turn the others to time of flight.
             var table = DelayTable.Collect(board, [net], Query);
@@ -73,7 +73,7 @@ public sealed record FlightTimeRule(RuleHeader Header, NetSet Nets, Window Allow
         var explanation = $"{subject} has a {what} of {unit.Show(delay.Seconds)} from {delay.Driven.Driver} to {delay.Path.Receiver} over {DisplayUnit.Millimetres.Show(delay.Path.LengthMetres)} of trace; allowed is {LimitText}.";
         judgement.Measured(
             subject, [net], delay.Seconds, Allowed, unit, table.MethodText(board), explanation,
-            holds ? null : PathLength.Change(delay.Path, net, Allowed.Nearest(delay.Seconds) - delay.Seconds));
+            holds ? null : PathLength.Change(delay.Path, Allowed.Nearest(delay.Seconds) - delay.Seconds));
         return new NetDelay(net, delay.Driven.Driver, delay.Path.Receiver, delay.Seconds, delay.Path.LengthMetres, holds);
     }
 }

@@ -84,7 +84,7 @@ public sealed record MatchRule(RuleHeader Header, NetSet Nets, double WithinSeco
                 : $"{subject} arrives after {unit.Show(delay.Seconds)}, {unit.Show(Math.Abs(delay.Seconds - middle))} too {side} against the middle of the nets that match ({unit.Show(low)} to {unit.Show(high)}); the farthest of them differs by {unit.Show(value)}, allowed is {unit.Show(WithinSeconds)}.";
             judgement.Measured(
                 subject, [net], value, Window.AtMost(WithinSeconds), unit, table.MethodText(board), explanation,
-                holds ? null : PathLength.Change(delay.Path, net, middle - delay.Seconds));
+                holds ? null : PathLength.Change(delay.Path, middle - delay.Seconds));
             entries.Add(new NetDelay(net, delay.Driven.Driver, delay.Path.Receiver, delay.Seconds, delay.Path.LengthMetres, holds));
         }
         judgement.Compared(new GroupDelays(

@@ -95,7 +95,7 @@ public sealed record OffsetRule(RuleHeader Header, NetSet Nets, ReferenceNets To
             var explanation = $"{subject} arrives after {unit.Show(delay.Seconds)}, {unit.Show(Math.Abs(value))} {side} {To.Name} ({unit.Show(reference)}); allowed is {Allowed.Show(unit)}.";
             judgement.Measured(
                 subject, [net], value, Allowed, unit, table.MethodText(board), explanation,
-                holds ? null : PathLength.Change(delay.Path, net, Aim(value) - value));
+                holds ? null : PathLength.Change(delay.Path, Aim(value) - value));
             entries.Add(new NetDelay(net, delay.Driven.Driver, delay.Path.Receiver, delay.Seconds, delay.Path.LengthMetres, holds));
         }
         judgement.Compared(new GroupDelays(

@@ -115,7 +115,7 @@ public sealed record PairSkewRule(
         var explanation = $"{name}: {late.Driven.Net} arrives {unit.Show(Math.Abs(skew))} after {early.Driven.Net} ({unit.Show(late.Seconds)} and {unit.Show(early.Seconds)}); allowed is {unit.Show(max)}.";
         judgement.Measured(
             name, both, Math.Abs(skew), window, unit, table.MethodText(board), explanation,
-            holds ? null : PathLength.Change(early.Path, net, Math.Abs(skew)));
+            holds ? null : PathLength.Change(early.Path, Math.Abs(skew)));
         judgement.Compared(new GroupDelays(
             Header.Id, Header.Kind, name, pair.Positive, p.Seconds, p.Seconds - max, p.Seconds + max,
             [Entry(p, holds), Entry(n, holds)]));

@@ -89,9 +89,18 @@ public sealed record SetupHoldRule(RuleHeader Header, NetSet Nets, TransferBudge
         TransferBudget? budget = null;
         if (word is not null && reader.Map.Choice("transfer", Transfers) is { } sourceSynchronous)
             budget = sourceSynchronous ? ReadSource(reader, nets, setup, hold, jitter) : ReadCommon(reader, setup, hold, jitter);
+        else
+            DeclareAllKeys(reader);
         return nets is null || budget is null || reader.Map.Problems.ErrorCount > errors
             ? null
             : new SetupHoldRule(header, nets, budget, margin, query);
+    }
+
+    /// <summary>Without the word that says which keys belong there, none of them is unknown.</summary>
+    private static void DeclareAllKeys(RuleReader reader)
+    {
+        foreach (var key in Kind.Keys)
+            reader.Map.Has(key.Key);
     }
 
     private static SourceSynchronousBudget? ReadSource(RuleReader reader, NetSet? nets, double setup, double hold, double jitter)
@@ -139,10 +148,10 @@ public sealed record SetupHoldRule(RuleHeader Header, NetSet Nets, TransferBudge
         judgement.Measured(
             $"{subject}, setup", nets, setup, window, unit, method,
             $"{subject} has a setup margin of {unit.Show(setup)}: {Budget.SetupText(flight, reference)}; {unit.Show(MarginSeconds)} must remain.",
-            Judgement.Holds(setup, window) ? null : PathLength.Change(delay.Path, delay.Driven.Net, setup - MarginSeconds));
+            Judgement.Holds(setup, window) ? null : PathLength.Change(delay.Path, setup - MarginSeconds));
         judgement.Measured(
             $"{subject}, hold", nets, hold, window, unit, method,
             $"{subject} has a hold margin of {unit.Show(hold)}: {Budget.HoldText(flight, reference)}; {unit.Show(MarginSeconds)} must remain.",
-            Judgement.Holds(hold, window) ? null : PathLength.Change(delay.Path, delay.Driven.Net, MarginSeconds - hold));
+            Judgement.Holds(hold, window) ? null : PathLength.Change(delay.Path, MarginSeconds - hold));
     }
 }
