@@ -8,10 +8,9 @@ namespace StackTiming.Lines.Fields.Currents;
 /// Series impedance of the copper of a solved section from direct current to skin effect, without roughness: resistance and internal inductance are the real and imaginary part of one
 /// function, so that they are causal together.
 /// <para>
-/// A signal's own conductor: Z = R_dc·q·coth(q) with q = √(jω/ω₀), the internal impedance of a plate that carries current on both faces (S. Ramo, J. R. Whinnery and T. Van Duzer,
-/// Fields and Waves in Communication Electronics, 3rd ed. 1994, ch. 3.17), with ω₀ such that the skin-effect limit is that of the solved current distribution
-/// (Wheeler 1942). Exact at both ends. Currents that a signal induces in other conductors: Z_s·spread·tanh(q), q = (1+j)·t/2δ of that
-/// conductor, which dies with the square of the frequency. Planes are thick against the skin depth: Z_s·spread.
+/// A signal's own conductor: <see cref="PlateImpedance"/>, exact at direct current and in the skin-effect limit of the solved current distribution. Currents that a signal induces in
+/// other conductors: Z_s·spread·tanh(q), q = (1+j)·t/2δ of that conductor, which dies with the square of the frequency. Planes are thick against the skin depth:
+/// Z_s·spread.
 /// </para>
 /// </summary>
 public sealed class ConductorLoss
@@ -84,18 +83,12 @@ public sealed class ConductorLoss
             if (rows[c] < 0)
                 continue;
             var own = spread.Conductors[c][rows[c], rows[c]];
-            var direct = resistivity / conductor.AreaSquareMetres;
-            sum[rows[c], rows[c]] += OwnImpedance(direct, surface * own) - surface * Complex.Tanh(q) * own;
+            var plate = new PlateImpedance(
+                resistivity / conductor.AreaSquareMetres, spread.InternalInductance[rows[c]], own * Math.Sqrt(Vacuum.Mu0 * resistivity));
+            sum[rows[c], rows[c]] += plate.At(omega) - surface * Complex.Tanh(q) * own;
         }
 
         return sum;
-    }
-
-    /// <summary>R·q·coth(q) whose limit at high frequency is the given skin-effect impedance.</summary>
-    private static Complex OwnImpedance(double direct, Complex skin)
-    {
-        var q = skin / direct;
-        return q.Magnitude < 1e-4 ? direct * (1 + q * q / 3) : skin / Complex.Tanh(q);
     }
 
     private static void AddScaled(double[,] sum, double[,] part, double scale)

@@ -10,16 +10,17 @@ namespace StackTiming.Lines.Fields.Currents;
 /// </summary>
 internal sealed class CurrentSpread
 {
-    // Densities near acute corners grow as a fraction of a power of u; a cube moves the nodes towards them.
-    private const int Nodes = 20;
-
-    private CurrentSpread(double[][,] conductors, double[,] planes) => (Conductors, Planes) = (conductors, planes);
+    private CurrentSpread(double[][,] conductors, double[,] planes, double[] internalInductance) =>
+        (Conductors, Planes, InternalInductance) = (conductors, planes, internalInductance);
 
     /// <summary>The integral over each conductor's surface, 1/m.</summary>
     public double[][,] Conductors { get; }
 
     /// <summary>The integral over the planes, 1/m.</summary>
     public double[,] Planes { get; }
+
+    /// <summary>What the inductance of each signal gains with even current in its own conductor, henry per metre.</summary>
+    public double[] InternalInductance { get; }
 
     /// <summary>The spread in a solved section.</summary>
     /// <exception cref="SectionNotSolvableException">A conductor has no thickness, so that the current at its edges has no finite loss.</exception>
@@ -44,12 +45,17 @@ internal sealed class CurrentSpread
         for (var i = 0; i < conductors.Length; i++)
             conductors[i] = new double[signals, signals];
         AddConductors(solution, drives, conductors);
-        return new CurrentSpread(conductors, OnPlanes(solution, drives));
+        double[] inductance =
+        [
+            .. Enumerable.Range(0, conductors.Length)
+                .Where(c => solution.Pairs.SignalRow(c) >= 0)
+                .Select(c => EvenCurrent.InternalInductance(solution, c, drives[solution.Pairs.SignalRow(c)]))
+        ];
+        return new CurrentSpread(conductors, OnPlanes(solution, drives), inductance);
     }
 
     private static void AddConductors(FieldSolution solution, SolvedDrive[] drives, double[][,] conductors)
     {
-        var rule = LegendreRule.Of(Nodes);
         var scale = 2 * Math.PI * Vacuum.Epsilon0 * Vacuum.SpeedOfLight;
         var density = new double[drives.Length];
         var first = 0;
@@ -58,13 +64,14 @@ internal sealed class CurrentSpread
             for (var side = 0; side < (drives[0].Mirrored ? 2 : 1); side++)
             {
                 var conductor = side == 1 ? solution.Pairs.Twin(panel.Piece.Conductor) : panel.Piece.Conductor;
-                for (var k = 0; k < Nodes; k++)
+                // The mirror image has the same angles.
+                var corner = solution.Frame.Back(panel.Origin);
+                var weights = CornerWeights.Of(panel, CornerWeights.InnerAngle(solution.Section.Conductors[panel.Piece.Conductor], corner));
+                for (var k = 0; k < panel.Terms; k++)
                 {
-                    var v = rule.Nodes[k];
-                    var u = v * v * v;
                     for (var i = 0; i < density.Length; i++)
-                        density[i] = scale * drives[i].ChargeAt(panel, first, side == 1, u);
-                    AddProducts(conductors[conductor], density, rule.Weights[k] * 3 * v * v / panel.Stretch(u));
+                        density[i] = scale * drives[i].ChargeAt(panel, first, side == 1, LegendreRule.Of(panel.Terms).Nodes[k]);
+                    AddProducts(conductors[conductor], density, weights[k]);
                 }
             }
 

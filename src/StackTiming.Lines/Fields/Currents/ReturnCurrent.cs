@@ -38,6 +38,30 @@ public sealed record ReturnCurrent(
         return new ReturnCurrent(planeMetres, total, x, density, At(0.025, x, magnitude), At(0.975, x, magnitude));
     }
 
+    /// <summary>The return current in every conductor at zero volts, in amperes by name, positive against a positive signal current.</summary>
+    /// <param name="solution">The solved section.</param>
+    /// <param name="signalAmperes">Current of each signal, in amperes.</param>
+    public static IReadOnlyDictionary<string, double> InConductors(FieldSolution solution, ReadOnlySpan<double> signalAmperes)
+    {
+        var conductors = solution.Section.Conductors;
+        var sums = conductors.Where(c => c.Grounded).ToDictionary(c => c.Name, _ => 0.0);
+        var drive = solution.Carry(signalAmperes);
+        var first = 0;
+        foreach (var panel in drive.Panels)
+        {
+            for (var side = 0; side < (drive.Mirrored ? 2 : 1); side++)
+            {
+                var conductor = conductors[side == 1 ? solution.Pairs.Twin(panel.Piece.Conductor) : panel.Piece.Conductor];
+                if (conductor.Grounded)
+                    sums[conductor.Name] -= 2 * Math.PI * Vacuum.Epsilon0 * Vacuum.SpeedOfLight * drive.Coefficient(first, side == 1);
+            }
+
+            first += panel.Terms;
+        }
+
+        return sums;
+    }
+
     /// <summary>Density against the signal current; the upward normal of the bottom plane counts as +1.</summary>
     internal static double[] PlaneDensity(DrivenField field, double planeMetres, int normal, double[] x)
     {

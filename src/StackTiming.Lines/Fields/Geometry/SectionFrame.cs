@@ -43,6 +43,10 @@ internal readonly record struct SectionFrame(double OriginX, double OriginY, boo
     public Complex Apply(double xMetres, double yMetres) =>
         new(xMetres - OriginX, Upright ? yMetres - OriginY : OriginY - yMetres);
 
+    /// <summary>A point of the solver in the section's coordinates.</summary>
+    public Complex Back(Complex point) =>
+        new(point.Real + OriginX, Upright ? point.Imaginary + OriginY : OriginY - point.Imaginary);
+
     /// <summary>Index of the conductor that is the mirror image of this one.</summary>
     public static int TwinOf(ImmutableArray<SectionConductor> conductors, int index, double tolerance)
     {
