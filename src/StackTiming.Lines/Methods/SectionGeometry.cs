@@ -62,7 +62,7 @@ public readonly record struct SectionGeometry(SectionKind Kind, bool IsHomogeneo
             1 => IsBare(section) ? SectionKind.SurfaceMicrostrip : SectionKind.LayeredMicrostrip,
             2 when OnOneLayer(section) && Alike(conductors[0], conductors[1]) =>
                 hasTop ? SectionKind.EdgeCoupledStripline : SectionKind.EdgeCoupledMicrostrip,
-            2 when hasTop && Alike(conductors[0], conductors[1]) && conductors[0].CentreMetres == conductors[1].CentreMetres => SectionKind.Broadside,
+            2 when hasTop && Alike(conductors[0], conductors[1]) && Near(conductors[0].CentreMetres, conductors[1].CentreMetres, conductors[0].WideMetres) => SectionKind.Broadside,
             _ => SectionKind.Bus,
         };
     }
