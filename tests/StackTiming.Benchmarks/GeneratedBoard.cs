@@ -69,10 +69,15 @@ public static class GeneratedBoard
           io-in:
             receiver: { capacitance: 1.5 pF, vil: 0.42 V, vih: 0.78 V, threshold: 0.6 V }
         parts:
-          U1: { pins: { "P0..P{{nets - 1}}": { model: io-out } } }
-          U2: { pins: { "P0..P{{nets - 1}}": { model: io-in } } }
+          U1: { pins: { {{Pins(nets, "io-out")}} } }
+          U2: { pins: { {{Pins(nets, "io-in")}} } }
 
         """;
+
+    // A range stands for 100 000 names at most.
+    private static string Pins(int nets, string model) => string.Join(
+        ", ",
+        Enumerable.Range(0, (nets + 49_999) / 50_000).Select(i => $"\"P{50_000 * i}..P{Math.Min(nets, 50_000 * (i + 1)) - 1}\": {{ model: {model} }}"));
 
     private static string Rules(int nets)
     {

@@ -300,4 +300,41 @@ public class LengthListReaderTests
             Assert.Equal(metres, list.Segments[0].LengthMetres);
         });
     }
+
+    [Fact]
+    public void A_file_in_UTF_16_reads_like_one_in_UTF_8()
+    {
+        const string text = "net,layer,length[µm],width[mm]\nÄ1,L1,5000,0.1\n";
+        foreach (var encoding in new[] { Encoding.Unicode, Encoding.BigEndianUnicode, Encoding.UTF8 })
+        {
+            var problems = new ProblemList();
+            var file = InputFileLoader.Decode("a.csv", [.. encoding.GetPreamble(), .. encoding.GetBytes(text)], problems);
+            var list = LengthListReader.Read(file!, LengthListFormat.Own, null, problems);
+            Assert.Empty(problems.Items);
+            Assert.Equal("Ä1", list!.Nets[0].Name);
+            Assert.Equal(5e-3, list.Segments[0].LengthMetres, 1e-15);
+        }
+    }
+
+    [Fact]
+    public void Memory_grows_linearly_with_the_rows()
+    {
+        // Allocated bytes do not depend on the machine's load, as time would.
+        static double BytesPerNet(int nets)
+        {
+            var text = new StringBuilder("net,from,to,layer,length[mm],width[mm]\n");
+            for (var i = 0; i < nets; i++)
+                text.Append(System.Globalization.CultureInfo.InvariantCulture, $"N{i:000000},U1.P{i:000000},*1,L1,5,0.1\nN{i:000000},*1,U2.P{i:000000},L1,5,0.1\n");
+            var file = new InputFile("a.csv", text.ToString(), "");
+            var problems = new ProblemList();
+            var before = GC.GetAllocatedBytesForCurrentThread();
+            LengthListReader.Read(file, LengthListFormat.Own, null, problems);
+            Assert.Empty(problems.Items);
+            return (GC.GetAllocatedBytesForCurrentThread() - before) / (double)nets;
+        }
+
+        BytesPerNet(100);
+        Assert.InRange(BytesPerNet(32_000) / BytesPerNet(8_000), 0.5, 1.3);
+        Assert.InRange(BytesPerNet(32_000), 100, 600);
+    }
 }
