@@ -12,7 +12,9 @@ try
     var configuration = new InvocationConfiguration { EnableDefaultExceptionHandler = false, ProcessTerminationTimeout = null };
     if (result.Errors.Count > 0 && result.Action is not { ClearsParseErrors: true })
     {
-        foreach (var error in result.Errors)
+        // What was not understood says more than that a command is missing.
+        var unknown = result.UnmatchedTokens.Count > 0 ? result.Errors.Where(e => !e.Message.StartsWith("Required command", StringComparison.Ordinal)).Take(1) : result.Errors;
+        foreach (var error in unknown)
             Console.Error.WriteLine($"stacktiming: {ProblemPrinter.Printable(error.Message)}");
         Console.Error.WriteLine($"Type '{RootCommandFactory.HelpHint(result)}' to see what can be written.");
         return ExitCode.WrongInput;

@@ -33,9 +33,9 @@ public static class SectionYaml
             layers.Add("{ copper: BOT, thickness: 0.0152 mm, use: plane }");
         if (double.IsPositiveInfinity(slabs[^1].Top) && slabs.Count == 1)
             slabs[0] = slabs[0] with { Top = coppers[0].Strip.Bottom }; // an air line stands on a slab of air
+        var y = slabs[0].Bottom;
         foreach (var slab in slabs)
         {
-            var y = slab.Bottom;
             foreach (var (copperName, strip) in coppers)
             {
                 if (strip.Bottom < slab.Bottom - 1e-12 || strip.Bottom > slab.Top + 1e-12 || layers.Any(l => l.Contains($"copper: {copperName},")))
@@ -45,8 +45,10 @@ public static class SectionYaml
                 layers.Add($"{{ copper: {copperName}, thickness: {N(strip.Thickness)} mm, use: signal, base: {(strip.Down ? "down" : "up")}, undercut: {N((strip.Wide - strip.Narrow) / 2)} mm }}");
                 y = face + strip.Thickness;
             }
-            if (y < slab.Top - 1e-12)
-                AddSlab(slab.Name, y, slab.Top);
+            if (y >= slab.Top - 1e-12)
+                continue;
+            AddSlab(slab.Name, y, slab.Top);
+            y = slab.Top;
         }
         if (top.ValueKind != JsonValueKind.Null)
             layers.Add("{ copper: TOP, thickness: 0.0152 mm, use: plane }");

@@ -23,23 +23,19 @@ internal sealed class LengthRows
     private SegmentDetails lastHole = SegmentDetails.None;
 
     public LengthRows(
-        HeaderRow header, FilePosition headerAt, LengthListFormat format, LengthListBuilder builder, short fileIndex, LayerCells layers,
-        ProblemList problems)
+        HeaderRow header, FilePosition headerAt, LengthListFormat format, LengthListBuilder builder, LayerCells layers, ProblemList problems)
     {
-        (this.header, this.headerAt, this.format, this.builder, this.fileIndex, this.layers, this.problems) =
-            (header, headerAt, format, builder, fileIndex, layers, problems);
+        (this.header, this.headerAt, this.format, this.builder, this.layers, this.problems) = (header, headerAt, format, builder, layers, problems);
         ends = new EndNames(format.PinSeparator);
         cells = new CellReader(header, headerAt.File, format, problems);
+        fileIndex = builder.AddFile(headerAt.File);
         foreach (var (column, metres) in format.Defaults)
             defaults[(int)column] = metres;
     }
 
     /// <summary>Reads a row; a wrong one is reported and left out.</summary>
-    /// <param name="row">The row.</param>
-    /// <param name="line">Line at which it starts, from 1.</param>
-    public void Add(SepReader.Row row, int line)
+    public void Add(SepReader.Row row)
     {
-        cells.Line = line;
         if (row.ColCount > header.CellCount && row[header.CellCount].Span is var extra && !extra.IsWhiteSpace())
         {
             problems.Error(
@@ -86,7 +82,7 @@ internal sealed class LengthRows
             WidthMetres = Needed(row, LengthColumn.Width),
             GapMetres = Optional(row, LengthColumn.Gap),
             Details = DetailsOf(row),
-            Line = cells.Line,
+            Line = cells.LineOf(row),
             FileIndex = fileIndex,
         };
         CheckDetails(row, segment);
@@ -130,7 +126,7 @@ internal sealed class LengthRows
             Layer = layer.First,
             ToLayer = layer.Second,
             Details = lastHole,
-            Line = cells.Line,
+            Line = cells.LineOf(row),
             FileIndex = fileIndex,
         };
     }

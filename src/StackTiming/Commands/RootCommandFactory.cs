@@ -12,6 +12,10 @@ internal static class RootCommandFactory
     {
         var root = new RootCommand("StackTiming checks a board's impedance, timing, matching and reflections from its stack-up and routed lengths.")
         {
+            NetCommand.Create(cancellation),
+            SectionCommand.Create(),
+            LinesCommand.Create(cancellation),
+            MethodsCommand.Create(),
             CompletionCommand.Create(),
         };
         HelpWithExamples.AddTo(root, () => """
