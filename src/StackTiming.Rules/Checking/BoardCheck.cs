@@ -25,7 +25,7 @@ public static class BoardCheck
         var physics = new BoardPhysics(board, options.Calculator, lines);
         var needs = NeedsOf(board);
         TracePaths(physics, needs, clock);
-        clock.Run("waves", 0, "waveforms", _ => { });
+        SolveWaves(physics, needs, clock);
         var judgements = Judge(board, physics, clock);
         var lineUses = CheckTables.Lines(board, lines);
 
@@ -44,10 +44,10 @@ public static class BoardCheck
             Rules = [.. board.Rules.Select(Summary)],
             Findings = ImmutableArray.Create(sorted),
             Groups = [.. judgements.SelectMany(j => j.Groups)],
-            Waves = [],
+            Waves = KeptWaves.Of(judgements.SelectMany(j => j.Waves), physics, options),
             Lines = lineUses,
             Methods = CheckTables.Methods(lineUses),
-            Assumptions = CheckTables.Assumptions(board, physics.Notes, 0),
+            Assumptions = CheckTables.Assumptions(board, physics.Notes, physics.WaveCount),
             Notes = board.Notes,
             Phases = [.. clock.Phases],
             NetCount = board.Lengths.Nets.Length,
@@ -74,6 +74,12 @@ public static class BoardCheck
     {
         var paths = needs.Select(n => (n.Net, n.Drive)).Distinct().ToArray();
         clock.Run("delays", paths.Length, "nets", i => physics.Drives(paths[i].Net, paths[i].Drive, out _));
+    }
+
+    private static void SolveWaves(BoardPhysics physics, List<NetNeed> needs, PhaseClock clock)
+    {
+        var waves = needs.SelectMany(physics.WavesFor).Distinct().ToArray();
+        clock.Run("waves", waves.Length, "waveforms", i => physics.Solve(waves[i]));
     }
 
     private static Judgement[] Judge(Board board, BoardPhysics physics, PhaseClock clock)

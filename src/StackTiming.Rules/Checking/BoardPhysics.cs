@@ -4,7 +4,9 @@ using StackTiming.Lines.Solutions;
 using StackTiming.Nets.Lengths;
 using StackTiming.Rules.Boards;
 using StackTiming.Rules.Judging;
+using StackTiming.Rules.Results;
 using StackTiming.Stackups.Layers;
+using StackTiming.Waves.BoardNets;
 using StackTiming.Waves.Paths;
 using StackTiming.Waves.Vias;
 
@@ -17,6 +19,7 @@ internal sealed class BoardPhysics : IBoardPhysics
     private readonly LineTable lines;
     private readonly PathTracer tracer;
     private readonly LineFigures figures;
+    private readonly WaveBook waves;
     private readonly ConcurrentDictionary<string, bool> notes = new(StringComparer.Ordinal);
     private readonly ConcurrentDictionary<(string Net, DriveChoice Drive), (ImmutableArray<DrivenNet> Drives, string Objection)> traced = [];
 
@@ -24,8 +27,9 @@ internal sealed class BoardPhysics : IBoardPhysics
     {
         this.board = board;
         this.lines = lines;
-        var delays = new PathDelays(lines, new ViaTable(board.StackUp, board.Lengths, board.Assumed.FrequencyHertz));
-        tracer = new PathTracer(board.Electrical, delays, note => notes.TryAdd(note, true));
+        var vias = new ViaTable(board.StackUp, board.Lengths, board.Assumed.FrequencyHertz);
+        tracer = new PathTracer(board.Electrical, new PathDelays(lines, vias), note => notes.TryAdd(note, true));
+        waves = new WaveBook(new BoardNetwork(lines, vias), board.Assumed);
         figures = new LineFigures(board.StackUp, calculator, board.Assumed.FrequencyHertz);
     }
 
@@ -65,7 +69,64 @@ internal sealed class BoardPhysics : IBoardPhysics
 
     public ReceiverResponse? Response(DrivenNet driven, string receiver, Edge edge, out string objection)
     {
-        objection = "waveforms of board nets are not computed yet";
+        if (KeyOf(driven, edge, out objection) is not { } key)
+            return null;
+        var wave = waves.Of(key);
+        objection = wave.Objection;
+        if (objection.Length > 0)
+            return null;
+        if (wave.Receivers.TryGetValue(key.Net.FindPin(receiver), out var response))
+            return response;
+        objection = $"{receiver} has no receiver model";
+        return null;
+    }
+
+    /// <summary>What must be solved for a need; nothing where the net has no such driver.</summary>
+    /// <param name="need">The need.</param>
+    public IEnumerable<WaveKey> WavesFor(NetNeed need)
+    {
+        if (need.Edge is not { } edge)
+            yield break;
+        foreach (var driven in Drives(need.Net, need.Drive, out _))
+        {
+            if (KeyOf(driven, edge, out _) is { } key)
+                yield return key;
+        }
+    }
+
+    /// <summary>Solves a waveform, so that rules find it.</summary>
+    /// <param name="key">Net, driver and edge.</param>
+    public void Solve(WaveKey key) => waves.Of(key);
+
+    /// <summary>Number of waveforms solved.</summary>
+    public int WaveCount => waves.Count;
+
+    /// <summary>A waveform with what was judged in it, or null where it has none.</summary>
+    /// <param name="judged">Which.</param>
+    public ReceiverWave? Waveform(JudgedWave judged)
+    {
+        if (board.Electrical.Find(judged.Net) is not { } net)
+            return null;
+        var key = new WaveKey(net, net.FindPin(judged.Driver), judged.Edge);
+        var node = net.FindPin(judged.Receiver);
+        if (!waves.Of(key).Receivers.TryGetValue(node, out var seen) || waves.Waveforms(key, out _) is not var (network, response))
+            return null;
+        var receiver = response.Receivers[WaveBook.ReceiverOf(network, node)];
+        var times = new double[receiver.Volts.Length];
+        for (var i = 0; i < times.Length; i++)
+            times[i] = i * response.StepSeconds;
+        return new ReceiverWave(
+            judged.Net, judged.Driver, judged.Receiver, judged.Edge == Edge.Rise ? "rise" : "fall", times, receiver.Volts, response.Pin.Volts,
+            seen.VilVolts, seen.VihVolts, net.Nodes[node].Pin?.Model?.Receiver?.TimingThresholdVolts, KeptWaves.Marks(seen, judged.Edge), [], null);
+    }
+
+    private WaveKey? KeyOf(DrivenNet driven, Edge edge, out string objection)
+    {
+        objection = "";
+        if (driven.Model is null)
+            objection = $"{driven.Driver} has no driver model";
+        else if (board.Electrical.Find(driven.Net) is { } net)
+            return new WaveKey(net, net.FindPin(driven.Driver), edge);
         return null;
     }
 }

@@ -1,0 +1,121 @@
+using System.Collections.Concurrent;
+using System.Collections.Immutable;
+using StackTiming.Nets.Electrical;
+using StackTiming.Nets.Parts;
+using StackTiming.Rules.Judging;
+using StackTiming.Waves.BoardNets;
+using StackTiming.Waves.Characteristics;
+using StackTiming.Waves.Metrics;
+using StackTiming.Waves.Networks;
+using StackTiming.Waves.Responses;
+using Edge = StackTiming.Rules.Judging.Edge;
+
+namespace StackTiming.Rules.Checking;
+
+/// <summary>
+/// Waveforms of board nets: each net, driver and edge is solved once, and of its waveforms only the metrics are kept. Safe on several threads.
+/// </summary>
+/// <param name="networks">Turns board nets into networks.</param>
+/// <param name="assumed">What is assumed of signals.</param>
+internal sealed class WaveBook(BoardNetwork networks, SignalAssumptions assumed)
+{
+    // Rise times of the driver alone after which it has crossed every threshold that it will cross.
+    private const double ReferenceRamps = 40;
+
+    private readonly ConcurrentDictionary<WaveKey, Lazy<SolvedWave>> solved = [];
+    private readonly ConcurrentDictionary<(DriverModel Model, Edge Edge), Lazy<Response>> references = [];
+
+    /// <summary>Number of waveforms solved so far.</summary>
+    public int Count => solved.Count;
+
+    /// <summary>The responses at the receivers of a net.</summary>
+    /// <param name="key">Net, driver and edge.</param>
+    public SolvedWave Of(WaveKey key) => solved.GetOrAdd(key, k => new Lazy<SolvedWave>(() => Judge(k))).Value;
+
+    /// <summary>Solves a net again for its waveforms.</summary>
+    /// <param name="key">Net, driver and edge.</param>
+    /// <param name="objection">Why there is none.</param>
+    public (Network Network, Response Response)? Waveforms(WaveKey key, out string objection)
+    {
+        if (networks.Of(key.Net, key.DriverNode, new BoardEdge(key.Edge == Edge.Rise, null), out objection) is not { } network)
+            return null;
+        return (network, TransientSolver.Solve(network));
+    }
+
+    /// <summary>Which of a network's receivers is that of a pin, or −1.</summary>
+    /// <param name="network">The network of a board net.</param>
+    /// <param name="node">Node of the pin in the board net.</param>
+    public static int ReceiverOf(Network network, int node)
+    {
+        var name = BoardNetwork.DieName(node);
+        for (var i = 0; i < network.Receivers.Length; i++)
+        {
+            if (network.NodeNames[network.Receivers[i].Node] == name)
+                return i;
+        }
+        return -1;
+    }
+
+    private SolvedWave Judge(WaveKey key)
+    {
+        if (Waveforms(key, out var objection) is not var (network, response))
+            return new SolvedWave(objection, ImmutableDictionary<int, ReceiverResponse>.Empty);
+        var driver = key.Net.Nodes[key.DriverNode].Pin!.Model!.Driver!;
+        var receivers = ImmutableDictionary.CreateBuilder<int, ReceiverResponse>();
+        foreach (var node in key.Net.ReceiverNodes)
+        {
+            if (node == key.DriverNode || ReceiverOf(network, node) is not (>= 0 and var index))
+                continue;
+            receivers[node] = Judge(key.Net.Nodes[node].Pin!.Model!.Receiver!, response, response.Receivers[index], network.Stimulus, driver, key.Edge);
+        }
+        return new SolvedWave("", receivers.ToImmutable());
+    }
+
+    private ReceiverResponse Judge(
+        ReceiverModel receiver, Response response, NodeVoltage voltage, Stimulus stimulus, DriverModel driver, Edge edge)
+    {
+        // Settling and the first wave need no thresholds; half of the swing stands in for those that are not stated.
+        var mid = receiver.TimingThresholdVolts ?? 0.5 * (voltage.InitialVolts + voltage.FinalVolts);
+        var levels = new Thresholds(receiver.Vil?.Value ?? mid, receiver.Vih?.Value ?? mid, mid);
+        double? reference = receiver.TimingThresholdVolts is { } threshold ? ReferenceCrossing(driver, edge, threshold) : null;
+        var metrics = WaveformMetrics.Of(voltage, response.StepSeconds, response.DurationSeconds, levels, stimulus, reference);
+        var rises = edge == Edge.Rise;
+        var beyond = rises ? metrics.MaxVolts - metrics.FinalVolts : metrics.FinalVolts - metrics.MinVolts;
+        return new ReceiverResponse(
+            receiver.Vil?.Value, receiver.Vih?.Value, metrics.FirstMidSeconds, metrics.FirstVihSeconds, metrics.FinalVihSeconds, metrics.RingbackVolts,
+            Math.Max(0, beyond), metrics.InitialVolts, metrics.FinalVolts, metrics.SettleSeconds ?? 0,
+            reference is null ? null : metrics.FlightTimeSeconds, metrics.FirstWaveVolts, response.DurationSeconds);
+    }
+
+    /// <summary>When the driver alone, in the reference load, crosses a threshold; null where it never does.</summary>
+    private double? ReferenceCrossing(DriverModel driver, Edge edge, double thresholdVolts)
+    {
+        var response = references.GetOrAdd((driver, edge), k => new Lazy<Response>(() => SolveReference(k.Model, k.Edge))).Value;
+        return WaveformMetrics.FirstCrossing(response.Pin, response.StepSeconds, thresholdVolts, edge == Edge.Rise);
+    }
+
+    private Response SolveReference(DriverModel model, Edge edge)
+    {
+        var load = assumed.Reference ?? AssumedLoad.Usual;
+        var builder = new NetworkBuilder();
+        var package = new DriverPackage(model.Package?.InductanceHenry ?? 0, (model.Package?.CapacitanceFarad ?? 0) + model.Capacitance.Value);
+        var driver = new Driver(
+            builder.Node("pin"), model.Low.Value, model.High.Value, model.Resistance.Value,
+            package is { InductanceHenries: 0, CapacitanceFarads: 0 } ? null : package);
+        var stimulus = edge == Edge.Rise ? Stimulus.Rising(model.Rise.Value) : Stimulus.Falling(model.Fall.Value);
+        builder.ShuntElement("pin", load.CapacitanceFarad, load.ResistanceOhms, load.ToVolts ?? 0.5 * (model.Low.Value + model.High.Value));
+        var slowest = stimulus.ShortestRampSeconds + model.Resistance.Value * (load.CapacitanceFarad + package.CapacitanceFarads);
+        return TransientSolver.Solve(builder.Build(driver, stimulus, ReferenceRamps * slowest));
+    }
+}
+
+/// <summary>A net, the node that drives it, and the edge that it sends.</summary>
+/// <param name="Net">The electrical net.</param>
+/// <param name="DriverNode">Node of its driver.</param>
+/// <param name="Edge">The edge.</param>
+internal readonly record struct WaveKey(ElectricalNet Net, int DriverNode, Edge Edge);
+
+/// <summary>What the receivers of a net see of an edge.</summary>
+/// <param name="Objection">Why there is no answer; empty where there is one.</param>
+/// <param name="Receivers">The responses by the receiver's node.</param>
+internal sealed record SolvedWave(string Objection, ImmutableDictionary<int, ReceiverResponse> Receivers);
