@@ -78,8 +78,8 @@ public static class BoardCheck
 
     private static void SolveWaves(BoardPhysics physics, List<NetNeed> needs, PhaseClock clock)
     {
-        var waves = needs.SelectMany(physics.WavesFor).Distinct().ToArray();
-        clock.Run("waves", waves.Length, "waveforms", i => physics.Solve(waves[i]));
+        var jobs = physics.WavesFor(needs);
+        clock.Run("waves", jobs.Length, "nets", i => physics.Solve(jobs[i]));
     }
 
     private static Judgement[] Judge(Board board, BoardPhysics physics, PhaseClock clock)

@@ -81,22 +81,49 @@ internal sealed class BoardPhysics : IBoardPhysics
         return null;
     }
 
-    /// <summary>What must be solved for a need; nothing where the net has no such driver.</summary>
-    /// <param name="need">The need.</param>
-    public IEnumerable<WaveKey> WavesFor(NetNeed need)
+    public double? FlightTime(DrivenNet driven, string receiver, Edge edge, out string objection)
     {
-        if (need.Edge is not { } edge)
-            yield break;
-        foreach (var driven in Drives(need.Net, need.Drive, out _))
-        {
-            if (KeyOf(driven, edge, out _) is { } key)
-                yield return key;
-        }
+        if (KeyOf(driven, edge, out objection) is not { } key)
+            return null;
+        var wave = waves.ArrivalOf(key);
+        objection = wave.Objection;
+        if (objection.Length > 0)
+            return null;
+        if (!wave.Receivers.TryGetValue(key.Net.FindPin(receiver), out var response))
+            objection = $"{receiver} has no receiver model";
+        else if (response.FlightSeconds is null)
+            objection = $"{driven.Net} has no flight time at {receiver}: there is no threshold, or it is never crossed";
+        return objection.Length > 0 ? null : response!.FlightSeconds;
     }
 
-    /// <summary>Solves a waveform, so that rules find it.</summary>
-    /// <param name="key">Net, driver and edge.</param>
-    public void Solve(WaveKey key) => waves.Of(key);
+    /// <summary>What must be solved for the needs of all rules: each net and driver once, both edges together, and no more of it than is wanted.</summary>
+    /// <param name="needs">The needs.</param>
+    public WaveJob[] WavesFor(IEnumerable<NetNeed> needs)
+    {
+        var wanted = new Dictionary<WaveKey, bool>();
+        foreach (var need in needs)
+        {
+            if (need.Edge is not { } edge)
+                continue;
+            foreach (var driven in Drives(need.Net, need.Drive, out _))
+            {
+                if (KeyOf(driven, edge, out _) is { } key)
+                    wanted[key] = need.ArrivalOnly && wanted.GetValueOrDefault(key, true);
+            }
+        }
+        var jobs = new List<WaveJob>(wanted.Count);
+        foreach (var (key, arrivalOnly) in wanted)
+        {
+            var other = wanted.TryGetValue(key.Opposite, out var otherArrivalOnly) && otherArrivalOnly == arrivalOnly;
+            if (!other || key.Edge == Edge.Rise)
+                jobs.Add(new WaveJob(key, arrivalOnly, other));
+        }
+        return [.. jobs];
+    }
+
+    /// <summary>Solves waveforms, so that rules find them.</summary>
+    /// <param name="job">What to solve.</param>
+    public void Solve(WaveJob job) => waves.Solve(job);
 
     /// <summary>Number of waveforms solved.</summary>
     public int WaveCount => waves.Count;

@@ -1,6 +1,5 @@
 using System.Collections.Concurrent;
 using System.Collections.Immutable;
-using StackTiming.Nets.Electrical;
 using StackTiming.Nets.Parts;
 using StackTiming.Rules.Judging;
 using StackTiming.Waves.BoardNets;
@@ -19,27 +18,71 @@ namespace StackTiming.Rules.Checking;
 /// <param name="assumed">What is assumed of signals.</param>
 internal sealed class WaveBook(BoardNetwork networks, SignalAssumptions assumed)
 {
+    // Of the window in which a net settles: one and a half times its longest way, where the window is forty.
+    private const double BeginningShare = 1.5 / 40;
+
     // Rise times of the driver alone after which it has crossed every threshold that it will cross.
     private const double ReferenceRamps = 40;
 
-    private readonly ConcurrentDictionary<WaveKey, Lazy<SolvedWave>> solved = [];
+    private readonly ConcurrentDictionary<WaveKey, SolvedWave> whole = [];
+    private readonly ConcurrentDictionary<WaveKey, SolvedWave> beginnings = [];
     private readonly ConcurrentDictionary<(DriverModel Model, Edge Edge), Lazy<Response>> references = [];
 
     /// <summary>Number of waveforms solved so far.</summary>
-    public int Count => solved.Count;
+    public int Count => whole.Count + beginnings.Count;
+
+    /// <summary>Solves waveforms, so that rules find them.</summary>
+    /// <param name="job">What to solve.</param>
+    public void Solve(WaveJob job)
+    {
+        if (job.ArrivalOnly)
+            ArrivalOf(job.Key);
+        else
+            Of(job.Key);
+        if (!job.BothEdges)
+            return;
+        if (job.ArrivalOnly)
+            ArrivalOf(job.Key.Opposite);
+        else
+            Of(job.Key.Opposite);
+    }
 
     /// <summary>The responses at the receivers of a net.</summary>
     /// <param name="key">Net, driver and edge.</param>
-    public SolvedWave Of(WaveKey key) => solved.GetOrAdd(key, k => new Lazy<SolvedWave>(() => Judge(k))).Value;
+    public SolvedWave Of(WaveKey key)
+    {
+        if (!whole.TryGetValue(key, out var wave))
+            SolveInto(whole, key, double.PositiveInfinity);
+        return wave ?? whole[key];
+    }
+
+    /// <summary>The responses as far as flight times are concerned: only the beginning is looked at, unless that is too short.</summary>
+    /// <param name="key">Net, driver and edge.</param>
+    public SolvedWave ArrivalOf(WaveKey key)
+    {
+        if (whole.TryGetValue(key, out var wave) || beginnings.TryGetValue(key, out wave))
+            return wave;
+        SolveInto(beginnings, key, BeginningShare);
+        wave = beginnings[key];
+        foreach (var response in wave.Receivers.Values)
+        {
+            if (response.FirstMidSeconds is null)
+                return Of(key);
+        }
+        return wave;
+    }
 
     /// <summary>Solves a net again for its waveforms.</summary>
     /// <param name="key">Net, driver and edge.</param>
     /// <param name="objection">Why there is none.</param>
-    public (Network Network, Response Response)? Waveforms(WaveKey key, out string objection)
+    public (Network Network, Response Response)? Waveforms(WaveKey key, out string objection) => Waveforms(key, double.PositiveInfinity, out objection);
+
+    private (Network Network, Response Response)? Waveforms(WaveKey key, double longest, out string objection)
     {
         if (networks.Of(key.Net, key.DriverNode, new BoardEdge(key.Edge == Edge.Rise, null), out objection) is not { } network)
             return null;
-        return (network, TransientSolver.Solve(network));
+        var ramps = 3 * network.Stimulus.ShortestRampSeconds;
+        return (network, TransientSolver.Solve(network with { DurationSeconds = Math.Min(network.DurationSeconds, ramps + longest * network.DurationSeconds) }));
     }
 
     /// <summary>Which of a network's receivers is that of a pin, or −1.</summary>
@@ -56,17 +99,44 @@ internal sealed class WaveBook(BoardNetwork networks, SignalAssumptions assumed)
         return -1;
     }
 
-    private SolvedWave Judge(WaveKey key)
+    /// <summary>
+    /// Solves an edge, and with it the opposite one where both ramps are alike: nets are linear, so that the two responses add up to the sum of
+    /// the levels at rest.
+    /// </summary>
+    private void SolveInto(ConcurrentDictionary<WaveKey, SolvedWave> book, WaveKey key, double longest)
     {
-        if (Waveforms(key, out var objection) is not var (network, response))
-            return new SolvedWave(objection, ImmutableDictionary<int, ReceiverResponse>.Empty);
+        if (Waveforms(key, longest, out var objection) is not var (network, response))
+        {
+            book[key] = new SolvedWave(objection, ImmutableDictionary<int, ReceiverResponse>.Empty);
+            return;
+        }
         var driver = key.Net.Nodes[key.DriverNode].Pin!.Model!.Driver!;
+        book[key] = Judge(key, network, response, driver);
+        if (driver.Rise.Value == driver.Fall.Value)
+            book[key.Opposite] = Judge(key.Opposite, network, Mirrored(response), driver);
+    }
+
+    private static Response Mirrored(Response response) => response with { Receivers = [.. response.Receivers.Select(Mirrored)] };
+
+    private static NodeVoltage Mirrored(NodeVoltage voltage)
+    {
+        var sum = voltage.InitialVolts + voltage.FinalVolts;
+        var volts = new double[voltage.Volts.Length];
+        for (var i = 0; i < volts.Length; i++)
+            volts[i] = sum - voltage.Volts[i];
+        return new NodeVoltage(volts, voltage.FinalVolts, voltage.InitialVolts);
+    }
+
+    private SolvedWave Judge(WaveKey key, Network network, Response response, DriverModel driver)
+    {
+        var ramp = network.Stimulus.ShortestRampSeconds;
+        var stimulus = key.Edge == Edge.Rise ? Stimulus.Rising(ramp) : Stimulus.Falling(ramp);
         var receivers = ImmutableDictionary.CreateBuilder<int, ReceiverResponse>();
         foreach (var node in key.Net.ReceiverNodes)
         {
             if (node == key.DriverNode || ReceiverOf(network, node) is not (>= 0 and var index))
                 continue;
-            receivers[node] = Judge(key.Net.Nodes[node].Pin!.Model!.Receiver!, response, response.Receivers[index], network.Stimulus, driver, key.Edge);
+            receivers[node] = Judge(key.Net.Nodes[node].Pin!.Model!.Receiver!, response, response.Receivers[index], stimulus, driver, key.Edge);
         }
         return new SolvedWave("", receivers.ToImmutable());
     }
@@ -108,14 +178,3 @@ internal sealed class WaveBook(BoardNetwork networks, SignalAssumptions assumed)
         return TransientSolver.Solve(builder.Build(driver, stimulus, ReferenceRamps * slowest));
     }
 }
-
-/// <summary>A net, the node that drives it, and the edge that it sends.</summary>
-/// <param name="Net">The electrical net.</param>
-/// <param name="DriverNode">Node of its driver.</param>
-/// <param name="Edge">The edge.</param>
-internal readonly record struct WaveKey(ElectricalNet Net, int DriverNode, Edge Edge);
-
-/// <summary>What the receivers of a net see of an edge.</summary>
-/// <param name="Objection">Why there is no answer; empty where there is one.</param>
-/// <param name="Receivers">The responses by the receiver's node.</param>
-internal sealed record SolvedWave(string Objection, ImmutableDictionary<int, ReceiverResponse> Receivers);

@@ -12,7 +12,7 @@ public readonly record struct DelaySpan(double Earliest, double Latest)
     public static DelaySpan Of(IBoardPhysics board, ReceiverDelay delay, DelayBasis basis)
     {
         var falling = basis == DelayBasis.FlightTime
-            ? board.Response(delay.Driven, delay.Path.Receiver, Edge.Fall, out _)?.FlightSeconds
+            ? board.FlightTime(delay.Driven, delay.Path.Receiver, Edge.Fall, out _)
             : null;
         var other = falling ?? delay.Seconds;
         return new DelaySpan(Math.Min(delay.Seconds, other), Math.Max(delay.Seconds, other));

@@ -80,12 +80,8 @@ public sealed class DelayTable
         var seconds = new double[ways.Count];
         for (var i = 0; i < ways.Count; i++)
         {
-            var response = board.Response(ways[i].Driven, ways[i].Path.Receiver, Edge.Rise, out var objection);
-            if (response?.FlightSeconds is not { } flight)
-            {
-                reason = response is null ? objection : $"{ways[i].Driven.Net} at {ways[i].Path.Receiver} has no flight time: no threshold, or it is never crossed";
+            if (board.FlightTime(ways[i].Driven, ways[i].Path.Receiver, Edge.Rise, out reason) is not { } flight)
                 return null;
-            }
             seconds[i] = flight;
         }
         return seconds;

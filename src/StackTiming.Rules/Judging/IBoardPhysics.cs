@@ -52,6 +52,14 @@ public interface IBoardPhysics
     /// <returns>One entry for every driver meant; empty where there is none.</returns>
     ImmutableArray<DrivenNet> Drives(string net, DriveChoice drive, out string objection);
 
+    /// <summary>Flight time of an edge from a driver to a receiver, against the reference load.</summary>
+    /// <param name="driven">The net from its driver.</param>
+    /// <param name="receiver">Receiver pin.</param>
+    /// <param name="edge">The edge.</param>
+    /// <param name="objection">Why there is no answer.</param>
+    /// <returns>Flight time, s, or null.</returns>
+    double? FlightTime(DrivenNet driven, string receiver, Edge edge, out string objection);
+
     /// <summary>What a receiver sees when its driver sends an edge.</summary>
     /// <param name="driven">The net from its driver.</param>
     /// <param name="receiver">Receiver pin.</param>

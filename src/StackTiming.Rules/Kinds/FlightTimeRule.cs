@@ -70,7 +70,7 @@ public sealed record FlightTimeRule(RuleHeader Header, NetSet Nets, Window Allow
         var net = delay.Driven.Net;
         var holds = Judgement.Holds(delay.Seconds, Allowed);
         var what = table.Basis == DelayBasis.FlightTime ? "flight time" : "time of flight";
-        var explanation = $"{subject} has a {what} of {unit.Show(delay.Seconds)} from {delay.Driven.Driver} to {delay.Path.Receiver} over {DisplayUnit.Millimetres.Show(delay.Path.LengthMetres)} of trace; allowed is {LimitText}.";
+        var explanation = $"{net} has a {what} of {unit.Show(delay.Seconds)} from {delay.Driven.Driver} to {delay.Path.Receiver} over {DisplayUnit.Millimetres.Show(delay.Path.LengthMetres)} of trace; allowed is {LimitText}.";
         judgement.Measured(
             subject, [net], delay.Seconds, Allowed, unit, table.MethodText(board), explanation,
             holds ? null : PathLength.Change(delay.Path, Allowed.Nearest(delay.Seconds) - delay.Seconds));

@@ -56,10 +56,8 @@ public sealed record SetupHoldRule(RuleHeader Header, NetSet Nets, TransferBudge
     public override string LimitText => $"margin of at least {DisplayUnit.Picoseconds.Show(MarginSeconds)}, {Budget.Name}";
 
     /// <inheritdoc/>
-    public override IEnumerable<NetNeed> Needs() => Query.Basis == DelayBasis.TimeOfFlight
-        ? NetNeed.ForPaths(Nets.Names, Query.Drive).Concat(NetNeed.ForPaths(Budget.ReferenceNames, ReferenceDrive))
-        : NetNeed.ForEdges(Nets.Names, Query.Drive, [Edge.Rise, Edge.Fall])
-            .Concat(NetNeed.ForEdges(Budget.ReferenceNames, ReferenceDrive, [Edge.Rise, Edge.Fall]));
+    public override IEnumerable<NetNeed> Needs() => NetNeed.ForDelays(Nets.Names, Query, [Edge.Rise, Edge.Fall])
+        .Concat(NetNeed.ForDelays(Budget.ReferenceNames, Query with { Drive = ReferenceDrive }, [Edge.Rise, Edge.Fall]));
 
     /// <inheritdoc/>
     public override void Judge(IBoardPhysics board, Judgement judgement)

@@ -114,6 +114,9 @@ internal sealed class TinyBoard : IBoardPhysics
         return [new DrivenNet(net, "U1." + net, Driver, [path], stubs.GetValueOrDefault(net, []), SeriesOhms)];
     }
 
+    public double? FlightTime(DrivenNet driven, string receiver, Edge edge, out string objection) =>
+        Response(driven, receiver, edge, out objection)?.FlightSeconds;
+
     public ReceiverResponse? Response(DrivenNet driven, string receiver, Edge edge, out string objection)
     {
         objection = "the driver has no model";
