@@ -6,6 +6,6 @@ namespace StackTiming.Lines.Fields;
 /// </param>
 public sealed record FieldSolverOptions(double RelativeTolerance)
 {
-    /// <summary>Five parts in ten thousand: half of what a signed report needs.</summary>
-    public static FieldSolverOptions Default { get; } = new(5e-4);
+    /// <summary>Three parts in ten thousand: a third of what a signed report needs.</summary>
+    public static FieldSolverOptions Default { get; } = new(3e-4);
 }
