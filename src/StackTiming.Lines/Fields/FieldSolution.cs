@@ -8,8 +8,7 @@ using StackTiming.Lines.Solutions;
 namespace StackTiming.Lines.Fields;
 
 /// <summary>
-/// A solved section: the line's constants, and the charges from which fields, currents and losses are computed. It holds the factored equations
-/// (some hundred kilobytes to some megabytes); keep only <see cref="Line"/> where many sections are kept.
+/// A solved section: the line's constants, and the charges from which fields, currents, losses and material sensitivities are computed.
 /// </summary>
 public sealed class FieldSolution
 {
@@ -43,13 +42,37 @@ public sealed class FieldSolution
     public ImmutableArray<DielectricShare> EnergyShares(ReadOnlySpan<double> signalVolts)
     {
         CheckSignals(signalVolts.Length);
-        return EnergyPicture.Shares(Mesh, pairs, surfaces.Regions.Media, signalVolts);
+        return EnergyPicture.Shares(Mesh, surfaces.Regions.Media, signalVolts);
     }
 
-    /// <summary>The derivative of the capacitance matrix with respect to the relative permittivity of a material, F/m; exact on this mesh.</summary>
+    /// <summary>
+    /// The derivative of the capacitance matrix with respect to the relative permittivity of a material, F/m; exact on this mesh. Times the
+    /// permittivity, the loss tangent and the angular frequency it is the material's part of the conductance matrix.
+    /// </summary>
     /// <param name="dielectric">Name of the material.</param>
-    public double[,] CapacitanceSlope(string dielectric) =>
-        EnergyPicture.CapacitanceSlope(Mesh, pairs, surfaces.Regions.Media, dielectric);
+    public double[,] CapacitanceSlope(string dielectric)
+    {
+        var sum = new double[pairs.Signals, pairs.Signals];
+        for (var m = 0; m < surfaces.Regions.Media.Count; m++)
+        {
+            if (surfaces.Regions.Media[m].Name == dielectric)
+                AddScaled(sum, Mesh.CapacitanceSlope(m), 1);
+        }
+
+        return sum;
+    }
+
+    /// <summary>
+    /// The conductance matrix over the angular frequency, F/m, with the loss tangents of the section: the sum over the materials of
+    /// permittivity times loss tangent times <see cref="CapacitanceSlope"/>.
+    /// </summary>
+    public double[,] LossCapacitance()
+    {
+        var sum = new double[pairs.Signals, pairs.Signals];
+        for (var m = 0; m < surfaces.Regions.Media.Count; m++)
+            AddScaled(sum, Mesh.CapacitanceSlope(m), surfaces.Regions.Media[m].Dk * surfaces.Regions.Media[m].Df);
+        return sum;
+    }
 
     /// <summary>The electric field when the signals have these voltages.</summary>
     public DrivenField Drive(ReadOnlySpan<double> signalVolts)
@@ -87,6 +110,15 @@ public sealed class FieldSolution
 
     private DrivenField Field(ParityCharges[] charges, ReadOnlySpan<double> signalVolts) =>
         Field(new SolvedDrive(Mesh.Panels, charges, pairs.Volts(signalVolts)));
+
+    private static void AddScaled(double[,] sum, double[,] part, double scale)
+    {
+        for (var i = 0; i < sum.GetLength(0); i++)
+        {
+            for (var j = 0; j < sum.GetLength(1); j++)
+                sum[i, j] += scale * part[i, j];
+        }
+    }
 
     private void CheckSignals(int count)
     {

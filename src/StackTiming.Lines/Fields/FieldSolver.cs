@@ -115,7 +115,7 @@ public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
         ImmutableArray<string> warnings = error <= options.RelativeTolerance
             ? []
             : [string.Create(CultureInfo.InvariantCulture, $"The field solver stopped at an estimated error of {error:P2}; {options.RelativeTolerance:P2} was asked for.")];
-        var shares = EnergyPicture.Shares(mesh, pairs, surfaces.Regions.Media, EnergyPicture.StandardDrive(pairs.Signals));
+        var shares = EnergyPicture.Shares(mesh, surfaces.Regions.Media, EnergyPicture.StandardDrive(pairs.Signals));
         var line = new LineSolution(
             [.. section.Signals.Select(c => c.Name)], MethodId, mesh.FilledCapacitance, inductance, shares, error, warnings);
         return new FieldSolution(section, line, frame, surfaces, pairs, mesh);

@@ -18,15 +18,14 @@ internal sealed class SolvedMesh
         this.pairs = pairs;
         var openSpace = section.BottomPlaneMetres is null;
         Images = new PlaneImages(!openSpace, section.TopPlaneMetres);
-        var mesh = PanelMesh.Of(surfaces, section.BottomPlaneMetres, section.TopPlaneMetres, symmetric, degrees);
-        var influence = new InfluenceMatrix(mesh.Panels, Images, symmetric);
-        Panels = mesh.Panels;
+        Panels = PanelMesh.Of(surfaces, section.BottomPlaneMetres, section.TopPlaneMetres, symmetric, degrees).Panels;
+        using var influence = new InfluenceMatrix(Panels, Images, symmetric);
         Unknowns = influence.Unknowns;
         double[] permittivities = [.. surfaces.Regions.Media.Select(m => m.Dk)];
         Filled = [.. pairs.Parities.Select(p => new ParityCharges(influence, pairs, permittivities, p, openSpace))];
         Empty = [.. pairs.Parities.Select(p => new ParityCharges(influence, pairs, [], p, openSpace))];
-        FilledCapacitance = Capacitance(Filled);
-        EmptyCapacitance = Capacitance(Empty);
+        FilledCapacitance = Matrix(Filled, (part, matrix) => part.AddCapacitance(matrix));
+        EmptyCapacitance = Matrix(Empty, (part, matrix) => part.AddCapacitance(matrix));
     }
 
     /// <summary>Charges with the dielectrics, by parity.</summary>
@@ -50,11 +49,14 @@ internal sealed class SolvedMesh
     /// <summary>Maxwell capacitance matrix of the signals in air, F/m.</summary>
     public double[,] EmptyCapacitance { get; }
 
-    private double[,] Capacitance(ParityCharges[] charges)
+    /// <summary>The derivative of <see cref="FilledCapacitance"/> with respect to the permittivity of a medium, F/m.</summary>
+    public double[,] CapacitanceSlope(int medium) => Matrix(Filled, (part, matrix) => part.AddCapacitanceSlope(matrix, medium));
+
+    private double[,] Matrix(ParityCharges[] charges, Action<ParityCharges, double[,]> add)
     {
         var matrix = new double[pairs.Signals, pairs.Signals];
         foreach (var part in charges)
-            part.AddCapacitance(matrix);
+            add(part, matrix);
         // Reciprocity holds up to the error of the mesh; the mean of both sides is nearer the truth than either.
         for (var i = 0; i < pairs.Signals; i++)
         {

@@ -102,7 +102,7 @@ internal sealed class SectionRegions
 
     private int Index(SectionDielectric dielectric)
     {
-        var index = media.FindIndex(m => m.Name == dielectric.Name && m.Dk == dielectric.Dk);
+        var index = media.FindIndex(m => m == dielectric);
         if (index >= 0)
             return index;
         media.Add(dielectric);

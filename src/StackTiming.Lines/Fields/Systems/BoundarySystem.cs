@@ -1,3 +1,4 @@
+using System.Buffers;
 using StackTiming.Lines.Fields.Kernels;
 using StackTiming.Lines.Fields.Panels;
 
@@ -6,15 +7,16 @@ namespace StackTiming.Lines.Fields.Systems;
 /// <summary>
 /// The equations for the total charge (free and bound) on the surfaces of a section: each conductor has its potential, and the electric
 /// flux density passes every dielectric boundary unbroken (C. Wei, R. F. Harrington, J. R. Mautz and T. K. Sarkar, IEEE Trans. MTT-32,
-/// 1984, pp. 439-450), both held at the Gauss nodes of every panel. Charge is counted in units of 2πε0.
+/// 1984, pp. 439-450), both held at the Gauss nodes of every panel. Charge is counted in units of 2πε0. The store is lent and must be
+/// given back.
 /// </summary>
-internal sealed class BoundarySystem
+internal sealed class BoundarySystem : IDisposable
 {
     private readonly InfluenceMatrix influence;
     private readonly double[] permittivities;
     private readonly int parity;
-    private readonly bool floating;
     private readonly int size;
+    private readonly double[] matrix;
     private readonly DenseLu lu;
 
     /// <summary>Sets up and factors the equations.</summary>
@@ -25,17 +27,14 @@ internal sealed class BoundarySystem
     public BoundarySystem(InfluenceMatrix influence, double[] permittivities, int parity, bool openSpace)
     {
         (this.influence, this.permittivities, this.parity) = (influence, permittivities, parity);
-        floating = openSpace && parity >= 0;
+        var floating = openSpace && parity >= 0;
         Unknowns = permittivities.Length == 0 ? influence.ConductorUnknowns : influence.Unknowns;
         size = Unknowns + (floating ? 1 : 0);
         var stride = Lanes.Padded(size);
-        var matrix = new double[size * stride];
-        for (var j = 0; j < Unknowns; j++)
-            influence.CopyPotentials(j, parity, matrix.AsSpan(j * stride, influence.ConductorUnknowns));
-        if (permittivities.Length > 0)
-            FillBoundaries(matrix, stride);
+        matrix = ArrayPool<double>.Shared.Rent(size * stride);
+        FillColumns(stride);
         if (floating)
-            FillFloating(matrix, stride);
+            FillFloating(stride);
         lu = new DenseLu(matrix, size, stride);
         if (lu.IsSingular)
             throw new SectionNotSolvableException("The equations of the cross-section have no unique solution; conductors may touch.");
@@ -45,8 +44,8 @@ internal sealed class BoundarySystem
     public int Unknowns { get; }
 
     /// <summary>
-    /// Charge coefficients for the given potentials of the conductors, in volts by index; in open space followed by the potential of the conductors
-    /// over that of the charges alone.
+    /// Charge coefficients for the given potentials of the conductors, in volts by index; in open space followed by the potential of the
+    /// conductors over that of the charges alone.
     /// </summary>
     public double[] Solve(ReadOnlySpan<double> potentials)
     {
@@ -58,141 +57,142 @@ internal sealed class BoundarySystem
     }
 
     /// <summary>The adjoint: λ with Aᵀλ = weights.</summary>
-    private double[] SolveAdjoint(ReadOnlySpan<double> weights)
+    public double[] SolveAdjoint(ReadOnlySpan<double> weights)
     {
         var x = new double[size];
         weights.CopyTo(x);
         lu.SolveTransposed(x);
-        return x[..Unknowns];
+        return x;
     }
 
     /// <summary>
-    /// Weights of the coefficients in Σ weight·(free charge of conductor), in units of 2πε0, on the surfaces present: on a face the charge outside is permittivity
-    /// times total charge; on a strip between unlike dielectrics the field through it counts too.
+    /// Weights of the coefficients in the free charge of one conductor, in units of 2πε0, on the surfaces present: on a face the charge
+    /// outside is permittivity times total charge; on a strip between unlike dielectrics the field through it counts too.
     /// </summary>
-    public double[] FreeCharge(ReadOnlySpan<double> conductorWeights) => FreeCharge(conductorWeights, permittivities, 1);
-
-    /// <summary>
-    /// The derivative of Σ weight·(free charge) with respect to the permittivity of each medium, by the adjoint of the equations
-    /// (D. G. Cacuci, Sensitivity theory for nonlinear systems, J. Math. Phys. 22, 1981).
-    /// </summary>
-    /// <param name="conductorWeights">Weight of each conductor.</param>
-    /// <param name="coefficients">The solution whose charges are meant.</param>
-    public double[] FreeChargeSlopes(ReadOnlySpan<double> conductorWeights, ReadOnlySpan<double> coefficients)
-    {
-        var slopes = new double[permittivities.Length];
-        var unit = new double[permittivities.Length];
-        for (var m = 0; m < slopes.Length; m++)
-        {
-            unit[m] = 1;
-            slopes[m] = Dot(FreeCharge(conductorWeights, unit, 0), coefficients);
-            unit[m] = 0;
-        }
-
-        var adjoint = SolveAdjoint(FreeCharge(conductorWeights));
-        var fields = Fields(coefficients);
-        for (var i = influence.ConductorPanels; i < influence.Panels.Length; i++)
-        {
-            var panel = influence.Panels[i];
-            var rule = LegendreRule.Of(panel.Terms);
-            var sum = 0.0;
-            for (var k = 0; k < panel.Terms; k++)
-                sum += adjoint[influence.FirstUnknown[i] + k] * panel.Stretch(rule.Nodes[k]) * fields[influence.FieldRow[i] + k];
-            // The contrast (a - b)/(a + b) of a boundary between permittivities a and b.
-            var (a, b) = (permittivities[panel.Piece.Left], permittivities[panel.Piece.Right]);
-            slopes[panel.Piece.Left] -= sum * 2 * b / ((a + b) * (a + b));
-            slopes[panel.Piece.Right] += sum * 2 * a / ((a + b) * (a + b));
-        }
-
-        return slopes;
-    }
-
-    /// <summary>The normal field (units of the charge per metre) at the field nodes.</summary>
-    private double[] Fields(ReadOnlySpan<double> coefficients)
-    {
-        var fields = new double[influence.FieldCount];
-        var column = new double[influence.FieldCount];
-        for (var j = 0; j < Unknowns; j++)
-        {
-            influence.CopyFields(j, parity, column);
-            for (var i = 0; i < fields.Length; i++)
-                fields[i] += coefficients[j] * column[i];
-        }
-
-        return fields;
-    }
-
-    private double[] FreeCharge(ReadOnlySpan<double> conductorWeights, double[] values, double airValue)
+    public double[] FreeCharge(int conductor)
     {
         var weights = new double[Unknowns];
         for (var i = 0; i < influence.ConductorPanels; i++)
         {
-            var panel = influence.Panels[i];
-            var weight = conductorWeights[panel.Piece.Conductor];
-            var (left, right) = values.Length == 0
-                ? (airValue, airValue)
-                : (values[panel.Piece.Left], panel.Piece.IsStrip ? values[panel.Piece.Right] : values[panel.Piece.Left]);
-            weights[influence.FirstUnknown[i]] += weight * (left + right) / 2;
-            if (left != right && weight != 0)
-                AddStripField(weights, i, weight * (left - right) / (2 * Math.PI));
+            if (influence.Panels[i].Piece.Conductor != conductor)
+                continue;
+            var (left, right) = Sides(influence.Panels[i]);
+            weights[influence.FirstUnknown[i]] += (left + right) / 2;
+            if (left != right)
+                AddStripField(weights, i, (left - right) / (2 * Math.PI));
         }
 
         return weights;
     }
 
+    /// <summary>
+    /// Adds to <paramref name="slopes"/>, by medium, the derivative of one conductor's free charge with respect to the permittivity of the medium,
+    /// by the adjoint of the equations (D. G. Cacuci, J. Math. Phys. 22, 1981): that of the weights, and that of the boundaries' contrasts.
+    /// </summary>
+    /// <param name="conductor">The conductor.</param>
+    /// <param name="adjoint">Solution of the adjoint for its weights.</param>
+    /// <param name="coefficients">The charges.</param>
+    /// <param name="fields">The charges' <see cref="Fields"/>.</param>
+    /// <param name="slopes">One number for each medium.</param>
+    public void AddFreeChargeSlopes(
+        int conductor, ReadOnlySpan<double> adjoint, ReadOnlySpan<double> coefficients, ReadOnlySpan<double> fields, Span<double> slopes)
+    {
+        for (var i = 0; i < influence.Panels.Length; i++)
+        {
+            var panel = influence.Panels[i];
+            var piece = panel.Piece;
+            if (piece.Conductor < 0)
+            {
+                var (a, b) = Sides(panel);
+                var sum = WeightedField(panel, influence.FieldRow[i], fields, adjoint.Slice(influence.FirstUnknown[i], panel.Terms));
+                // The contrast (a - b)/(a + b) of a boundary between permittivities a and b.
+                slopes[piece.Left] -= sum * 2 * b / ((a + b) * (a + b));
+                slopes[piece.Right] += sum * 2 * a / ((a + b) * (a + b));
+            }
+            else if (piece.Conductor == conductor)
+            {
+                var charge = coefficients[influence.FirstUnknown[i]];
+                slopes[piece.Left] += piece.IsStrip ? charge / 2 : charge;
+                if (!piece.IsStrip)
+                    continue;
+                slopes[piece.Right] += charge / 2;
+                if (influence.FieldRow[i] < 0)
+                    continue;
+                var through = WeightedField(panel, influence.FieldRow[i], fields, LegendreRule.Of(panel.Terms).Weights) / (2 * Math.PI);
+                slopes[piece.Left] += through;
+                slopes[piece.Right] -= through;
+            }
+        }
+    }
+
+    /// <summary>The normal field of charges (units of charge per metre) at the field nodes.</summary>
+    public double[] Fields(ReadOnlySpan<double> coefficients)
+    {
+        var fields = new double[influence.FieldCount];
+        for (var j = 0; j < Unknowns; j++)
+            influence.AddFields(j, parity, coefficients[j], fields);
+        return fields;
+    }
+
+    /// <summary>Gives the store back; nothing can be solved any more.</summary>
+    public void Dispose() => ArrayPool<double>.Shared.Return(matrix);
+
+    private (double Left, double Right) Sides(Panel panel)
+    {
+        if (permittivities.Length == 0)
+            return (1, 1);
+        var left = permittivities[panel.Piece.Left];
+        return (left, panel.Piece.Right >= 0 ? permittivities[panel.Piece.Right] : left);
+    }
+
+    private static double WeightedField(Panel panel, int row, ReadOnlySpan<double> fields, ReadOnlySpan<double> weights)
+    {
+        var nodes = LegendreRule.Of(panel.Terms).Nodes;
+        var sum = 0.0;
+        for (var k = 0; k < panel.Terms; k++)
+            sum += weights[k] * panel.Stretch(nodes[k]) * fields[row + k];
+        return sum;
+    }
+
     private void AddStripField(double[] weights, int index, double weight)
     {
         var panel = influence.Panels[index];
-        var rule = LegendreRule.Of(panel.Terms);
         var column = new double[influence.FieldCount];
         for (var j = 0; j < Unknowns; j++)
         {
             influence.CopyFields(j, parity, column);
-            for (var k = 0; k < panel.Terms; k++)
-                weights[j] += weight * rule.Weights[k] * panel.Stretch(rule.Nodes[k]) * column[influence.FieldRow[index] + k];
+            weights[j] += weight * WeightedField(panel, influence.FieldRow[index], column, LegendreRule.Of(panel.Terms).Weights);
         }
     }
 
-    private static double Dot(ReadOnlySpan<double> a, ReadOnlySpan<double> b)
+    private void FillColumns(int stride)
     {
-        var sum = 0.0;
-        for (var i = 0; i < a.Length; i++)
-            sum += a[i] * b[i];
-        return sum;
-    }
-
-    private void FillBoundaries(double[] matrix, int stride)
-    {
-        var (first, rows) = (influence.ConductorUnknowns, Unknowns - influence.ConductorUnknowns);
-        var scales = new double[rows];
-        for (var i = influence.ConductorPanels; i < influence.Panels.Length; i++)
+        var conductors = influence.ConductorUnknowns;
+        var boundaries = Unknowns - conductors;
+        var scales = new double[boundaries];
+        for (var i = influence.ConductorPanels; i < influence.Panels.Length && boundaries > 0; i++)
         {
             var panel = influence.Panels[i];
-            var contrast = Contrast(panel);
-            var rule = LegendreRule.Of(panel.Terms);
+            var (left, right) = Sides(panel);
+            var nodes = LegendreRule.Of(panel.Terms).Nodes;
             for (var k = 0; k < panel.Terms; k++)
-                scales[influence.FirstUnknown[i] - first + k] = contrast * panel.Stretch(rule.Nodes[k]);
+                scales[influence.FirstUnknown[i] - conductors + k] = (left - right) / (left + right) * panel.Stretch(nodes[k]);
         }
 
         for (var j = 0; j < Unknowns; j++)
         {
-            var column = matrix.AsSpan(j * stride + first, rows);
-            influence.CopyFields(j, parity, column);
-            for (var i = 0; i < rows; i++)
-                column[i] *= scales[i];
+            var column = matrix.AsSpan(j * stride, stride);
+            influence.CopyPotentials(j, parity, column[..conductors]);
+            influence.CopyFields(j, parity, column.Slice(conductors, boundaries));
+            LaneSpans.Scale(column.Slice(conductors, boundaries), scales);
+            column[Unknowns..].Clear();
         }
 
-        for (var i = influence.ConductorPanels; i < influence.Panels.Length; i++)
-            AddOwnCharge(matrix, stride, influence.FirstUnknown[i], influence.Panels[i].Terms);
+        for (var i = influence.ConductorPanels; i < influence.Panels.Length && boundaries > 0; i++)
+            AddOwnCharge(stride, influence.FirstUnknown[i], influence.Panels[i].Terms);
     }
 
-    private double Contrast(Panel panel)
-    {
-        var (left, right) = (permittivities[panel.Piece.Left], permittivities[panel.Piece.Right]);
-        return (left - right) / (left + right);
-    }
-
-    private static void AddOwnCharge(double[] matrix, int stride, int start, int terms)
+    private void AddOwnCharge(int stride, int start, int terms)
     {
         var rule = LegendreRule.Of(terms);
         for (var n = 0; n < terms; n++)
@@ -202,9 +202,11 @@ internal sealed class BoundarySystem
         }
     }
 
-    private void FillFloating(double[] matrix, int stride)
+    private void FillFloating(int stride)
     {
-        matrix.AsSpan(Unknowns * stride, influence.ConductorUnknowns).Fill(1);
+        var column = matrix.AsSpan(Unknowns * stride, stride);
+        column.Clear();
+        column[..influence.ConductorUnknowns].Fill(1);
         for (var i = 0; i < influence.Panels.Length && influence.FirstUnknown[i] < Unknowns; i++)
             matrix[influence.FirstUnknown[i] * stride + Unknowns] = 1;
     }

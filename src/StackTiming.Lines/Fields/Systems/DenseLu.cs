@@ -48,11 +48,11 @@ internal sealed class DenseLu
         for (var i = 0; i < size; i++)
             (b[i], b[pivots[i]]) = (b[pivots[i]], b[i]);
         for (var j = 0; j < size; j++)
-            Subtract(Column(j)[(j + 1)..size], b[j], b[(j + 1)..size]);
+            LaneSpans.AddScaled(b[(j + 1)..size], Column(j)[(j + 1)..size], -b[j]);
         for (var j = size - 1; j >= 0; j--)
         {
             b[j] /= lu[j * stride + j];
-            Subtract(Column(j)[..j], b[j], b[..j]);
+            LaneSpans.AddScaled(b[..j], Column(j)[..j], -b[j]);
         }
     }
 
@@ -60,9 +60,9 @@ internal sealed class DenseLu
     public void SolveTransposed(Span<double> b)
     {
         for (var j = 0; j < size; j++)
-            b[j] = (b[j] - Dot(Column(j)[..j], b[..j])) / lu[j * stride + j];
+            b[j] = (b[j] - LaneSpans.Dot(Column(j)[..j], b[..j])) / lu[j * stride + j];
         for (var j = size - 1; j >= 0; j--)
-            b[j] -= Dot(Column(j)[(j + 1)..size], b[(j + 1)..size]);
+            b[j] -= LaneSpans.Dot(Column(j)[(j + 1)..size], b[(j + 1)..size]);
         for (var i = size - 1; i >= 0; i--)
             (b[i], b[pivots[i]]) = (b[pivots[i]], b[i]);
     }
@@ -96,9 +96,9 @@ internal sealed class DenseLu
             }
 
             var below = column[(j + 1)..size];
-            Scale(below, 1 / diagonal);
+            LaneSpans.Scale(below, 1 / diagonal);
             for (var k = j + 1; k < end; k++)
-                Subtract(below, Column(k)[j], Column(k)[(j + 1)..size]);
+                LaneSpans.AddScaled(Column(k)[(j + 1)..size], below, -Column(k)[j]);
         }
     }
 
@@ -122,7 +122,7 @@ internal sealed class DenseLu
         {
             var column = Column(k);
             for (var j = start; j < end; j++)
-                Subtract(Column(j)[(j + 1)..end], column[j], column[(j + 1)..end]);
+                LaneSpans.AddScaled(column[(j + 1)..end], Column(j)[(j + 1)..end], -column[j]);
         }
     }
 
@@ -193,40 +193,5 @@ internal sealed class DenseLu
         for (var j = start; j < end; j++)
             sum -= Vector512.LoadUnsafe(ref origin, (nuint)(j * stride + row)) * Unsafe.Add(ref column, j);
         sum.StoreUnsafe(ref column, (nuint)row);
-    }
-
-    private static void Scale(Span<double> values, double factor)
-    {
-        var i = 0;
-        ref var value = ref MemoryMarshal.GetReference(values);
-        for (; i + Lanes.Count <= values.Length; i += Lanes.Count)
-            (Vector512.LoadUnsafe(ref value, (nuint)i) * factor).StoreUnsafe(ref value, (nuint)i);
-        for (; i < values.Length; i++)
-            values[i] *= factor;
-    }
-
-    private static void Subtract(ReadOnlySpan<double> from, double factor, Span<double> target)
-    {
-        var i = 0;
-        ref var source = ref MemoryMarshal.GetReference(from);
-        ref var value = ref MemoryMarshal.GetReference(target);
-        for (; i + Lanes.Count <= from.Length; i += Lanes.Count)
-            (Vector512.LoadUnsafe(ref value, (nuint)i) - Vector512.LoadUnsafe(ref source, (nuint)i) * factor).StoreUnsafe(ref value, (nuint)i);
-        for (; i < from.Length; i++)
-            target[i] -= factor * from[i];
-    }
-
-    private static double Dot(ReadOnlySpan<double> a, ReadOnlySpan<double> b)
-    {
-        var i = 0;
-        var sums = Vector512<double>.Zero;
-        ref var first = ref MemoryMarshal.GetReference(a);
-        ref var second = ref MemoryMarshal.GetReference(b);
-        for (; i + Lanes.Count <= a.Length; i += Lanes.Count)
-            sums += Vector512.LoadUnsafe(ref first, (nuint)i) * Vector512.LoadUnsafe(ref second, (nuint)i);
-        var sum = Vector512.Sum(sums);
-        for (; i < a.Length; i++)
-            sum += a[i] * b[i];
-        return sum;
     }
 }

@@ -1,18 +1,20 @@
+using System.Buffers;
 using StackTiming.Lines.Fields.Kernels;
 using StackTiming.Lines.Fields.Panels;
 
 namespace StackTiming.Lines.Fields.Systems;
 
 /// <summary>
-/// What the charge of every polynomial of every panel does at the panels' Gauss nodes: its potential at the nodes of conductors and its normal field at
-/// the nodes of dielectric boundaries (and of strips between unlike dielectrics). Column-major. Of a symmetric section the panels'
-/// mirror images are kept apart, so that even and odd drives share the work.
+/// What the charge of every polynomial of every panel does at the panels' Gauss nodes: its potential at the nodes of conductors and its
+/// normal field at the nodes of dielectric boundaries (and of strips between unlike dielectrics). Column-major. Of a symmetric section
+/// the panels' mirror images are kept apart, so that even and odd drives share the work. The store is lent and must be given back.
 /// </summary>
-internal sealed class InfluenceMatrix
+internal sealed class InfluenceMatrix : IDisposable
 {
     private readonly double[] direct;
     private readonly double[] mirror;
     private readonly int fieldRows;
+    private readonly int stride;
 
     public InfluenceMatrix(Panel[] panels, PlaneImages images, bool symmetric)
     {
@@ -21,26 +23,29 @@ internal sealed class InfluenceMatrix
         for (var i = 0; i < panels.Length; i++)
             FirstUnknown[i + 1] = FirstUnknown[i] + panels[i].Terms;
         ConductorPanels = panels.Count(p => p.Piece.Conductor >= 0);
-        var conductorPoints = ChargePoints.NodesOf(panels.AsSpan(0, ConductorPanels));
-        Panel[] fieldPanels = [.. panels.Skip(ConductorPanels), .. panels.Where(p => p.Piece.IsStrip && p.Piece.Left != p.Piece.Right)];
-        var fieldPoints = ChargePoints.NodesOf(fieldPanels);
-        fieldRows = conductorPoints.Padded;
-        Stride = fieldRows + fieldPoints.Padded;
-        direct = new double[Unknowns * Stride];
-        mirror = symmetric ? new double[Unknowns * Stride] : [];
         FieldRow = new int[panels.Length];
-        Array.Fill(FieldRow, -1);
-        foreach (var panel in fieldPanels)
+        var fieldPanels = new List<Panel>();
+        foreach (var i in Enumerable.Range(ConductorPanels, panels.Length - ConductorPanels).Concat(Enumerable.Range(0, ConductorPanels)))
         {
-            FieldRow[Array.IndexOf(panels, panel)] = FieldCount;
-            FieldCount += panel.Terms;
+            var isField = i >= ConductorPanels || (panels[i].Piece.IsStrip && panels[i].Piece.Left != panels[i].Piece.Right);
+            FieldRow[i] = isField ? FieldCount : -1;
+            if (!isField)
+                continue;
+            FieldCount += panels[i].Terms;
+            fieldPanels.Add(panels[i]);
         }
 
+        var conductorPoints = ChargePoints.NodesOf(panels.AsSpan(0, ConductorPanels));
+        var fieldPoints = ChargePoints.NodesOf([.. fieldPanels]);
+        fieldRows = conductorPoints.Padded;
+        stride = fieldRows + fieldPoints.Padded;
+        direct = Empty();
+        mirror = symmetric ? Empty() : [];
         for (var i = 0; i < panels.Length; i++)
         {
-            Fill(direct, i, images, conductorPoints, fieldPoints, false, Math.Max(FieldRow[i], 0), FieldRow[i] < 0 ? 0 : panels[i].Terms);
+            Fill(direct, i, images, conductorPoints, fieldPoints, false);
             if (symmetric)
-                Fill(mirror, i, images, conductorPoints, fieldPoints, true, 0, 0);
+                Fill(mirror, i, images, conductorPoints, fieldPoints, true);
         }
     }
 
@@ -56,7 +61,7 @@ internal sealed class InfluenceMatrix
     /// <summary>Row of each panel's first node among the field nodes, or -1 where its field is not kept.</summary>
     public int[] FieldRow { get; }
 
-    /// <summary>Number of field nodes.</summary>
+    /// <summary>Number of field nodes: those of the boundaries, in the order of the panels, and then those of strips.</summary>
     public int FieldCount { get; }
 
     /// <summary>Number of coefficients.</summary>
@@ -65,33 +70,48 @@ internal sealed class InfluenceMatrix
     /// <summary>Number of coefficients on conductors.</summary>
     public int ConductorUnknowns => FirstUnknown[ConductorPanels];
 
-    /// <summary>True where the mirror images are kept.</summary>
-    public bool Symmetric => mirror.Length > 0;
-
-    private int Stride { get; }
-
-    /// <summary>Potentials at the conductor nodes from one coefficient, with the image's charge equal (+1), opposite (-1) or left out (0).</summary>
+    /// <summary>Copies the potentials at the conductor nodes from one coefficient, with its image's charge equal (+1), opposite (-1) or left out (0).</summary>
     public void CopyPotentials(int unknown, int parity, Span<double> target) => Copy(unknown, parity, 0, target);
 
-    /// <summary>Normal fields at the field nodes, those of the boundaries before those of the strips.</summary>
+    /// <summary>Copies the normal fields at the first field nodes likewise.</summary>
     public void CopyFields(int unknown, int parity, Span<double> target) => Copy(unknown, parity, fieldRows, target);
+
+    /// <summary>Adds the normal fields at the field nodes of a coefficient of the given size.</summary>
+    public void AddFields(int unknown, int parity, double coefficient, Span<double> target)
+    {
+        LaneSpans.AddScaled(target, direct.AsSpan(unknown * stride + fieldRows, target.Length), coefficient);
+        if (parity != 0)
+            LaneSpans.AddScaled(target, mirror.AsSpan(unknown * stride + fieldRows, target.Length), parity * coefficient);
+    }
+
+    /// <summary>Gives the store back; the matrix must not be used any more.</summary>
+    public void Dispose()
+    {
+        ArrayPool<double>.Shared.Return(direct);
+        if (mirror.Length > 0)
+            ArrayPool<double>.Shared.Return(mirror);
+    }
+
+    private double[] Empty()
+    {
+        var store = ArrayPool<double>.Shared.Rent(Unknowns * stride);
+        store.AsSpan(0, Unknowns * stride).Clear();
+        return store;
+    }
 
     private void Copy(int unknown, int parity, int row, Span<double> target)
     {
-        var from = direct.AsSpan(unknown * Stride + row, target.Length);
-        from.CopyTo(target);
-        if (parity == 0 || !Symmetric)
-            return;
-        var image = mirror.AsSpan(unknown * Stride + row, target.Length);
-        for (var i = 0; i < target.Length; i++)
-            target[i] += parity * image[i];
+        direct.AsSpan(unknown * stride + row, target.Length).CopyTo(target);
+        if (parity != 0)
+            LaneSpans.AddScaled(target, mirror.AsSpan(unknown * stride + row, target.Length), parity);
     }
 
-    private void Fill(
-        double[] matrix, int index, PlaneImages images, ChargePoints conductorPoints, ChargePoints fieldPoints, bool mirrored, int ownStart, int ownCount)
+    private void Fill(double[] matrix, int index, PlaneImages images, ChargePoints conductorPoints, ChargePoints fieldPoints, bool mirrored)
     {
-        var columns = matrix.AsSpan(FirstUnknown[index] * Stride, Panels[index].Terms * Stride);
-        images.AddPotential(Panels[index], conductorPoints, mirrored, columns, Stride);
-        images.AddNormalField(Panels[index], fieldPoints, mirrored, ownStart, ownCount, columns[fieldRows..], Stride);
+        var columns = matrix.AsSpan(FirstUnknown[index] * stride, Panels[index].Terms * stride);
+        images.AddPotential(Panels[index], conductorPoints, mirrored, columns, stride);
+        var isOwn = !mirrored && FieldRow[index] >= 0;
+        images.AddNormalField(
+            Panels[index], fieldPoints, mirrored, isOwn ? FieldRow[index] : 0, isOwn ? Panels[index].Terms : 0, columns[fieldRows..], stride);
     }
 }
