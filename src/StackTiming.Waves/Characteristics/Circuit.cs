@@ -20,6 +20,9 @@ internal sealed class Circuit
     /// <summary>Lines that are stepped as lines.</summary>
     public required LosslessLine[] Lines { get; init; }
 
+    /// <summary>Lines with loss.</summary>
+    public required LossyLine[] LossyLines { get; init; }
+
     /// <summary>Coupled groups.</summary>
     public required CoupledLines[] Groups { get; init; }
 
@@ -30,8 +33,8 @@ internal sealed class Circuit
     public required Shunt[] Shunts { get; init; }
 
     /// <summary>The circuit of a network.</summary>
-    /// <param name="network">A network without problems and without lossy lines.</param>
-    /// <param name="stepSeconds">The step; lines with a shorter delay are lumped.</param>
+    /// <param name="network">A network without problems.</param>
+    /// <param name="stepSeconds">The step; lines without loss and with a shorter delay are lumped.</param>
     public static Circuit Of(Network network, double stepSeconds)
     {
         var nodes = network.NodeNames.Length;
@@ -72,6 +75,7 @@ internal sealed class Circuit
             SourceNode = source,
             SourceSiemens = 1 / network.Driver.ResistanceOhms,
             Lines = [.. lines],
+            LossyLines = [.. network.LossyLines],
             Groups = [.. network.CoupledLines],
             Branches = [.. branches],
             Shunts = [.. shunts],

@@ -26,6 +26,8 @@ internal sealed class SteadyState
         matrix[circuit.SourceNode, circuit.SourceNode] += circuit.SourceSiemens;
         foreach (var line in circuit.Lines)
             Join(matrix, line.From, line.To, 1 / Resistance(line.Z0Ohms * line.DelaySeconds));
+        foreach (var line in circuit.LossyLines)
+            Join(matrix, line.From, line.To, 1 / Math.Max(SmallOhms, line.LengthMetres * line.Constants.DcResistanceOhmPerMetre));
         foreach (var group in circuit.Groups)
         {
             for (var k = 0; k < group.From.Length; k++)

@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using StackTiming.Waves.Characteristics;
+using StackTiming.Waves.FrequencyDomain;
 using StackTiming.Waves.Networks;
 using StackTiming.Waves.Responses;
 
@@ -16,7 +17,8 @@ public sealed record NetResponse(Network Network, Response Response, ImmutableAr
     /// <param name="options">How finely to step; null for the default.</param>
     public static NetResponse Solve(Network network, TransientOptions? options = null)
     {
-        var response = TransientSolver.Solve(network, options);
+        // Loss spreads a wave over time in a way that no delayed copy of it has: such nets are linear here and solved in the frequency domain.
+        var response = network.LossyLines.IsEmpty ? TransientSolver.Solve(network, options) : FrequencySolver.Solve(network);
         var reference = network.WithReferenceLoadAlone() is { } alone ? TransientSolver.Solve(alone, options) : null;
         var metrics = ImmutableArray.CreateBuilder<ReceiverMetrics>(network.Receivers.Length);
         for (var i = 0; i < network.Receivers.Length; i++)
