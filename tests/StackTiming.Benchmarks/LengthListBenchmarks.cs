@@ -8,7 +8,7 @@ using StackTiming.Stackups.Reading;
 namespace StackTiming.Benchmarks;
 
 /// <summary>Reading the length list of a generated board, and joining its rows into trees.</summary>
-[MemoryDiagnoser]
+[MemoryDiagnoser, MinColumn, MedianColumn]
 public class LengthListBenchmarks
 {
     private InputFile file = null!;

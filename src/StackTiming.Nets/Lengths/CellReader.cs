@@ -15,18 +15,18 @@ internal sealed class CellReader(HeaderRow header, string file, LengthListFormat
     private readonly double[] most = [.. Enumerable.Range(0, LengthColumns.Names.Length).Select(i => LengthColumns.MostMetres((LengthColumn)i))];
     private readonly bool[] unitReported = new bool[LengthColumns.Names.Length];
 
-    /// <summary>Line of a row in the file, from 1.</summary>
-    public int LineOf(SepReader.Row row) => row.LineNumberFrom + format.SkipLines;
+    /// <summary>Line at which the row that is being read starts, from 1.</summary>
+    public int Line { get; set; }
 
-    /// <summary>Where a row starts.</summary>
-    public FilePosition PositionOf(SepReader.Row row) => new(file, LineOf(row), 0);
+    /// <summary>Where the row starts.</summary>
+    private FilePosition RowPosition => new(file, Line, 0);
 
     /// <summary>Where the cell of a column stands; the row where it has no such cell.</summary>
     public FilePosition PositionOf(SepReader.Row row, LengthColumn column) =>
-        header.PlaceOf(column) is >= 0 and var place && place < row.ColCount ? PositionOf(row, row[place].Span) : PositionOf(row);
+        header.PlaceOf(column) is >= 0 and var place && place < row.ColCount ? PositionOf(row, row[place].Span) : RowPosition;
 
     /// <summary>Where a cell stands.</summary>
-    public FilePosition PositionOf(SepReader.Row row, ReadOnlySpan<char> cell) => PositionIn(row.Span, cell, file, LineOf(row));
+    public FilePosition PositionOf(SepReader.Row row, ReadOnlySpan<char> cell) => PositionIn(row.Span, cell, file, Line);
 
     /// <summary>Where a cell stands in a row that may run over several lines.</summary>
     /// <param name="row">Text of the row.</param>

@@ -23,6 +23,9 @@ internal sealed class LengthListBuilder
         indices = new Dictionary<string, int>(expectedRows / 8, StringComparer.Ordinal);
     }
 
+    /// <summary>Number of rows added so far.</summary>
+    public int RowCount => total;
+
     /// <summary>Starts another file.</summary>
     /// <param name="path">Its path as messages show it.</param>
     /// <returns>The index that its segments carry.</returns>
@@ -67,6 +70,30 @@ internal sealed class LengthListBuilder
         grouped &= total == 0 || net >= netOfRow[total - 1];
         total++;
         counts[net]++;
+    }
+
+    /// <summary>Adds all rows of another builder after those of this one.</summary>
+    /// <param name="other">The other; its rows carry the file index of this one.</param>
+    public void Append(LengthListBuilder other)
+    {
+        if (total + other.total > segments.Length)
+        {
+            var capacity = Math.Max(2 * total, total + other.total);
+            Array.Resize(ref segments, capacity);
+            Array.Resize(ref netOfRow, capacity);
+        }
+        var map = new int[other.names.Count];
+        for (var i = 0; i < map.Length; i++)
+        {
+            map[i] = Find(other.names[i]) is >= 0 and var known ? known : AddNet(other.names[i]);
+            counts[map[i]] += other.counts[i];
+        }
+        Array.Copy(other.segments, 0, segments, total, other.total);
+        for (var row = 0; row < other.total; row++, total++)
+        {
+            netOfRow[total] = map[other.netOfRow[row]];
+            grouped &= total == 0 || netOfRow[total] >= netOfRow[total - 1];
+        }
     }
 
     /// <summary>The list. The builder is not used after it.</summary>

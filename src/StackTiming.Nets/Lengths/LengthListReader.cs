@@ -39,15 +39,14 @@ public static class LengthListReader
             problems.Error(FilePosition.WholeFile(file.Path), format.SkipLines > 0 ? "nothing follows the skipped lines" : "the file is empty", example);
             return;
         }
-        var text = new StringReader(file.Text);
-        for (var i = 0; i < format.SkipLines; i++)
-            text.ReadLine();
         var separator = format.Separator ?? SeparatorOf(file.Text.AsSpan(start));
-        var options = Sep.New(separator).Reader(o => o with { HasHeader = false, DisableColCountCheck = true, DisableFastFloat = true });
+        var fileIndex = builder.AddFile(file.Path);
+        if (ParallelLengthReader.TryRead(file, start, separator, format, stackUp, builder, fileIndex))
+            return;
         try
         {
-            using var reader = options.From(text);
-            ReadRows(reader, file, format, new LayerCells(stackUp, format, problems), builder, problems);
+            using var reader = RowsOf(file.Text.AsMemory(start), separator);
+            ReadRows(reader, file, format, new LayerCells(stackUp, format, problems), builder, fileIndex, problems);
         }
         catch (NotSupportedException)
         {
@@ -56,12 +55,16 @@ public static class LengthListReader
         }
     }
 
+    /// <summary>The rows of a text. The library numbers the first of them wrongly, as if a header stood before it.</summary>
+    internal static SepReader RowsOf(ReadOnlyMemory<char> text, char separator) => Sep.New(separator)
+        .Reader(o => o with { HasHeader = false, DisableColCountCheck = true, DisableFastFloat = true })
+        .From(new MemoryTextReader(text));
+
     private static void ReadRows(
-        SepReader reader, InputFile file, LengthListFormat format, LayerCells layers, LengthListBuilder builder, ProblemList problems)
+        SepReader reader, InputFile file, LengthListFormat format, LayerCells layers, LengthListBuilder builder, short fileIndex, ProblemList problems)
     {
         LengthRows? rows = null;
         var count = 0;
-        // The library numbers the first row of a file without a header of its own as if a header stood before it.
         var firstLine = 1;
         foreach (var row in reader)
         {
@@ -73,17 +76,17 @@ public static class LengthListReader
             {
                 var at = new FilePosition(file.Path, line, 0);
                 var cells = HeaderCells(row, at);
-                rows = new LengthRows(HeaderRow.Read(cells, format, at, problems), at, format, builder, layers, problems);
+                rows = new LengthRows(HeaderRow.Read(cells, format, at, problems), at, format, builder, fileIndex, layers, problems);
                 continue;
             }
-            rows.Add(row);
+            rows.Add(row, line);
             count++;
         }
         if (count == 0)
             problems.Error(FilePosition.WholeFile(file.Path), "the file has a header but no rows", "write one row per segment");
     }
 
-    private static List<(HeaderText Text, FilePosition At)> HeaderCells(SepReader.Row row, FilePosition rowAt)
+    internal static List<(HeaderText Text, FilePosition At)> HeaderCells(SepReader.Row row, FilePosition rowAt)
     {
         var cells = new List<(HeaderText, FilePosition)>(row.ColCount);
         for (var i = 0; i < row.ColCount; i++)
@@ -95,7 +98,7 @@ public static class LengthListReader
     }
 
     // Lines, but no more than rows of the shortest useful kind would fill: a file of line breaks takes no memory.
-    private static int ExpectedRows(string text) => Math.Min(text.AsSpan().Count('\n') + 1, text.Length / 24 + 1);
+    internal static int ExpectedRows(ReadOnlySpan<char> text) => Math.Min(text.Count('\n') + 1, text.Length / 24 + 1);
 
     private static int StartOf(string text, int skipLines)
     {

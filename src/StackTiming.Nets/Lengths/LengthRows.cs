@@ -23,19 +23,23 @@ internal sealed class LengthRows
     private SegmentDetails lastHole = SegmentDetails.None;
 
     public LengthRows(
-        HeaderRow header, FilePosition headerAt, LengthListFormat format, LengthListBuilder builder, LayerCells layers, ProblemList problems)
+        HeaderRow header, FilePosition headerAt, LengthListFormat format, LengthListBuilder builder, short fileIndex, LayerCells layers,
+        ProblemList problems)
     {
-        (this.header, this.headerAt, this.format, this.builder, this.layers, this.problems) = (header, headerAt, format, builder, layers, problems);
+        (this.header, this.headerAt, this.format, this.builder, this.fileIndex, this.layers, this.problems) =
+            (header, headerAt, format, builder, fileIndex, layers, problems);
         ends = new EndNames(format.PinSeparator);
         cells = new CellReader(header, headerAt.File, format, problems);
-        fileIndex = builder.AddFile(headerAt.File);
         foreach (var (column, metres) in format.Defaults)
             defaults[(int)column] = metres;
     }
 
     /// <summary>Reads a row; a wrong one is reported and left out.</summary>
-    public void Add(SepReader.Row row)
+    /// <param name="row">The row.</param>
+    /// <param name="line">Line at which it starts, from 1.</param>
+    public void Add(SepReader.Row row, int line)
     {
+        cells.Line = line;
         if (row.ColCount > header.CellCount && row[header.CellCount].Span is var extra && !extra.IsWhiteSpace())
         {
             problems.Error(
@@ -82,7 +86,7 @@ internal sealed class LengthRows
             WidthMetres = Needed(row, LengthColumn.Width),
             GapMetres = Optional(row, LengthColumn.Gap),
             Details = DetailsOf(row),
-            Line = cells.LineOf(row),
+            Line = cells.Line,
             FileIndex = fileIndex,
         };
         CheckDetails(row, segment);
@@ -126,7 +130,7 @@ internal sealed class LengthRows
             Layer = layer.First,
             ToLayer = layer.Second,
             Details = lastHole,
-            Line = cells.LineOf(row),
+            Line = cells.Line,
             FileIndex = fileIndex,
         };
     }

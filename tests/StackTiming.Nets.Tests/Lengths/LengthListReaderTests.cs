@@ -337,4 +337,44 @@ public class LengthListReaderTests
         Assert.InRange(BytesPerNet(32_000) / BytesPerNet(8_000), 0.5, 1.3);
         Assert.InRange(BytesPerNet(32_000), 100, 600);
     }
+
+    private static string LargeList(int rows)
+    {
+        var text = new StringBuilder("\n\r\nnet,from,to,layer,length[mm],width[mm]\r\n");
+        for (var i = 0; i < rows; i++)
+        {
+            // Nets come back after others, and pieces of the file end inside nets.
+            text.Append(System.Globalization.CultureInfo.InvariantCulture, $"N{i / 3 % 5000:0000},*{i % 3},*{(i % 3) + 1},L{(i % 4) + 1},{1 + (i % 997)},0.{100 + (i % 7)}{(i % 2 == 0 ? "\r\n" : "\n")}");
+            if (i % 1000 == 0)
+                text.Append(i % 2000 == 0 ? "\n" : ",,,,,\n");
+        }
+        return text.ToString();
+    }
+
+    [Fact]
+    public void A_large_list_is_the_same_read_in_pieces_or_in_one()
+    {
+        var text = LargeList(60_000);
+        Assert.True(text.Length > 1_500_000);
+        var inPieces = ReadWhole(text);
+        // A quote in a place where it changes nothing keeps the text in one piece.
+        var inOne = ReadWhole(text.Replace(",from,", ",\"from\",", StringComparison.Ordinal));
+        Assert.Equal(inOne.Nets, inPieces.Nets);
+        Assert.Equal(inOne.Segments.ToArray(), inPieces.Segments.ToArray());
+        var lines = text.Split('\n');
+        foreach (var segment in inPieces.Segments)
+            Assert.Contains($",L{segment.Layer[1..]},{Math.Round(1e3 * segment.LengthMetres)},", lines[segment.Line - 1], StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Problems_of_a_large_list_are_reported_as_in_a_small_one()
+    {
+        var lines = LargeList(60_000).Split('\n');
+        (lines[10], lines[50_000]) = ("A,*1,*2,L1,x,0.1", "A,*1,*2,L9,1,0.1");
+        var (_, problems) = Read(string.Join('\n', lines), null, FourLayers());
+        Assert.Equal("a.csv:6:13: error: a trace cannot run on 'L2', which the stack-up uses as a plane; say 'use: mixed' in the stack-up if it carries both", problems[0]);
+        Assert.Equal("a.csv:11:12: error: 'length' says 'x', which is not a number; write a number such as 12.5", problems[1]);
+        Assert.StartsWith("a.csv:50001:9: error: the stack-up 'four' has no copper layer 'L9'", problems[2], StringComparison.Ordinal);
+        Assert.Equal(3, problems.Length);
+    }
 }
