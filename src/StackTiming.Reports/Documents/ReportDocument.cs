@@ -35,6 +35,9 @@ public sealed record Section(string Anchor, string Heading, ImmutableArray<Block
 
     /// <summary>Whether it begins a page.</summary>
     public bool BeginsPage { get; init; }
+
+    /// <summary>Whether a table of contents lists it.</summary>
+    public bool InContents { get; init; } = true;
 }
 
 /// <summary>How a section is numbered.</summary>

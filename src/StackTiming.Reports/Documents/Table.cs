@@ -16,7 +16,11 @@ public enum Alignment
 /// <param name="Heading">Heading, repeated on every page; may be empty.</param>
 /// <param name="Alignment">Where its text stands.</param>
 /// <param name="Grows">True where the column takes the width that the others leave.</param>
-public sealed record Column(string Heading, Alignment Alignment = Alignment.Left, bool Grows = false);
+public sealed record Column(string Heading, Alignment Alignment = Alignment.Left, bool Grows = false)
+{
+    /// <summary>Whether its text may be broken into lines. Figures are not, as long as the page is wide enough.</summary>
+    public bool Wraps { get; init; } = Alignment == Alignment.Left;
+}
 
 /// <summary>A cell of a table.</summary>
 public abstract record Cell
@@ -63,5 +67,5 @@ public sealed record Row(ImmutableArray<Cell> Cells, string? Anchor = null)
 /// <summary>A table. It may run over pages; its head is then repeated.</summary>
 /// <param name="Columns">The columns.</param>
 /// <param name="Rows">The rows.</param>
-/// <param name="Foot">A remark under it, such as how many rows were left out; may be empty.</param>
-public sealed record Table(ImmutableArray<Column> Columns, ImmutableArray<Row> Rows, string Foot = "") : Block;
+/// <param name="Foot">A remark under it, such as how many rows were left out; null or empty for none.</param>
+public sealed record Table(ImmutableArray<Column> Columns, ImmutableArray<Row> Rows, RichText? Foot = null) : Block;

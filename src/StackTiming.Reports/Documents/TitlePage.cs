@@ -10,10 +10,10 @@ namespace StackTiming.Reports.Documents;
 public sealed record TitleBlock(string Kind, string Title, ImmutableArray<(string Name, string Fact)> Facts) : Block;
 
 /// <summary>The verdict, large, with the counts behind it.</summary>
-/// <param name="Verdict">The verdict.</param>
+/// <param name="Verdict">The verdict; null where nothing was judged, which is no pass.</param>
 /// <param name="Statement">What it means, in a sentence or two.</param>
 /// <param name="Counts">Names and numbers.</param>
-public sealed record VerdictPanel(Verdict Verdict, RichText Statement, ImmutableArray<(string Name, int Count, string? Link)> Counts) : Block;
+public sealed record VerdictPanel(Verdict? Verdict, RichText Statement, ImmutableArray<(string Name, int Count, string? Link)> Counts) : Block;
 
 /// <summary>Lines for the people who sign: name, signature and date for each role.</summary>
 /// <param name="Roles">The roles.</param>

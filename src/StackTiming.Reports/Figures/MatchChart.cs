@@ -15,7 +15,7 @@ namespace StackTiming.Reports.Figures;
 public sealed class MatchChart(GroupDelays data) : IDrawing
 {
     /// <summary>Most nets drawn; of more the ones nearest to the limits or beyond are drawn.</summary>
-    public const int MostNets = 42;
+    public const int MostNets = 28;
 
     private const float RowHeight = 11.5f;
     private const float HeadHeight = 15;

@@ -20,7 +20,7 @@ public readonly record struct LineLabel(string Layer, string Text);
 /// <param name="lines">What is written beside the copper layers.</param>
 public sealed class StackUpDrawing(StackUp stackUp, ImmutableArray<LineLabel> lines) : IDrawing
 {
-    private const float PreferredHeight = 300;
+    private const float PreferredHeight = 240;
     private const float LeastCopper = 7.5f;
     private const float LeastDielectric = 12.5f;
     private const float HeadHeight = 14;

@@ -44,7 +44,7 @@ public sealed class WaveformFigure(ReceiverWave wave) : IDrawing
 
         plot.Axes.SetLimits(0, last > 0 ? last : 1, low, high);
         Style(plot, font, unit);
-        plot.Layout.Fixed(new PixelPadding(34, 52, 26, 15));
+        plot.Layout.Fixed(new PixelPadding(34, 52, 28, 15));
         plot.Render(canvas, (int)width, (int)height);
 
         using var pen = new Pen(canvas);

@@ -99,7 +99,7 @@ internal sealed class BlockLayout(IReadOnlyList<NumberedHeading> contents)
     {
         foreach (var heading in contents)
         {
-            if (heading.Level > list.Depth || heading.Section.Numbering == Numbering.None)
+            if (heading.Level > list.Depth || heading.Section.Numbering == Numbering.None || !heading.Section.InContents)
                 continue;
             var style = heading.Level == 1 ? TextStyle.Body with { Face = TextStyle.Heading(1).Face } : TextStyle.Body;
             var indent = (heading.Level - 1) * 22f;
@@ -172,7 +172,8 @@ internal sealed class BlockLayout(IReadOnlyList<NumberedHeading> contents)
                 ink.Lines(keyLines, x, y + 1.2f, style with { Size = style.Size });
                 ink.Lines(lines, x + keyWidth, y + 1.2f, style);
                 ink.Rule(x, x + width, y + height - 0.2f, Palette.Hairline, 0.4f);
-            });
+            })
+            { KeepWithNext = true };
         }
     }
 
@@ -190,6 +191,6 @@ internal sealed class BlockLayout(IReadOnlyList<NumberedHeading> contents)
             canvas.Restore();
         })
         { SpaceBefore = 8, KeepWithNext = true, Anchor = figure.Anchor };
-        yield return new Chunk(lines.Count * style.LineHeight + 6, (ink, x, y) => ink.Lines(lines, x, y + 2, style));
+        yield return new Chunk(lines.Count * style.LineHeight + 7, (ink, x, y) => ink.Lines(lines, x, y + 3, style));
     }
 }

@@ -7,8 +7,8 @@ namespace StackTiming.Reports.Pdf;
 internal static class TableLayout
 {
     private const float Gutter = 9;
-    private const float PaddingAbove = 2.6f;
-    private const float PaddingBelow = 2.8f;
+    private const float PaddingAbove = 2.0f;
+    private const float PaddingBelow = 2.2f;
     private const int CellCharacters = 320;
     private const int CellLines = 6;
 
@@ -30,13 +30,13 @@ internal static class TableLayout
             yield return LayRow(table, table.Rows[r], widths, total) with
             {
                 HeadOnNewPage = head,
-                KeepWithNext = (r == 0 && table.Rows.Length > 1) || r == table.Rows.Length - 2 || (r == table.Rows.Length - 1 && table.Foot.Length > 0),
+                KeepWithNext = (r == 0 && table.Rows.Length > 1) || r == table.Rows.Length - 2 || (r == table.Rows.Length - 1 && table.Foot is { Runs.IsEmpty: false }),
                 Anchor = table.Rows[r].Anchor,
             };
         }
-        if (table.Foot.Length > 0)
+        if (table.Foot is { Runs.IsEmpty: false } foot)
         {
-            var lines = LineBreaker.Break(table.Foot, TextStyle.Small, width);
+            var lines = LineBreaker.Break(foot, TextStyle.Small, width);
             yield return new Chunk(lines.Count * TextStyle.Small.LineHeight + 2, (ink, x, y) => ink.Lines(lines, x, y + 2, TextStyle.Small));
         }
         yield return new Chunk(5, (_, _, _) => { });
@@ -117,32 +117,32 @@ internal static class TableLayout
         {
             natural[i] = LineBreaker.NaturalWidth(table.Columns[i].Heading, TextStyle.Label, CellCharacters);
             least[i] = LineBreaker.WidestWord(table.Columns[i].Heading, TextStyle.Label, CellCharacters);
+            var whole = 0f;
             foreach (var row in table.Rows.AsSpan(0, Math.Min(table.Rows.Length, MeasuredRows)))
             {
                 var (cellNatural, cellLeast) = Measure(row.Cells[i], available / count);
-                natural[i] = MathF.Max(natural[i], cellNatural);
+                whole = MathF.Max(whole, cellNatural);
                 least[i] = MathF.Max(least[i], cellLeast);
             }
+            natural[i] = MathF.Max(natural[i], whole);
+            if (!table.Columns[i].Wraps && whole <= available * 0.6f)
+                least[i] = MathF.Max(least[i], whole);
         }
 
         var naturalSum = natural.Sum();
         if (naturalSum <= available)
-        {
-            var growing = table.Columns.Count(c => c.Grows);
-            for (var i = 0; i < count && growing > 0; i++)
-            {
-                if (table.Columns[i].Grows)
-                    natural[i] += (available - naturalSum) / growing;
-            }
-            return natural;
-        }
-
+            return Grown(table, natural, available - naturalSum);
         var leastSum = least.Sum();
-        var spare = available - leastSum;
+        if (leastSum > available)
+            return [.. least.Select(w => w * available / leastSum)];
         var wish = naturalSum - leastSum;
-        for (var i = 0; i < count; i++)
-            least[i] += wish <= 0 ? 0 : spare * (natural[i] - least[i]) / wish;
-        return least;
+        return [.. least.Select((w, i) => w + (available - leastSum) * (natural[i] - w) / wish)];
+    }
+
+    private static float[] Grown(Table table, float[] natural, float spare)
+    {
+        var growing = table.Columns.Count(c => c.Grows);
+        return growing == 0 ? natural : [.. natural.Select((w, i) => table.Columns[i].Grows ? w + spare / growing : w)];
     }
 
     // A single endless word must not push the other columns off the page: no more than the even share is asked for it.

@@ -45,17 +45,17 @@ internal static class TitlePageLayout
     public static Chunk Lay(VerdictPanel panel, float width)
     {
         const float wordWidth = 128, padding = 12;
-        var passes = panel.Verdict == Verdict.Pass;
+        var passes = panel.Verdict != Verdict.Fail;
         var statement = LineBreaker.Break(panel.Statement, TextStyle.Body, width - wordWidth - 2 * padding, 600, 5);
         var topHeight = MathF.Max(52, statement.Count * TextStyle.Body.LineHeight + 22);
         const float countsHeight = 38;
         var height = topHeight + countsHeight;
-        var color = passes ? Palette.Accent : Palette.Alarm;
+        var color = panel.Verdict switch { Verdict.Pass => Palette.Accent, Verdict.Fail => Palette.Alarm, _ => Palette.Quiet };
         return new Chunk(height, (ink, x, y) =>
         {
             // A failure is a filled field, a pass an outlined one: they differ in a grey print too.
-            var word = passes ? "PASS" : "FAIL";
-            var style = TextStyle.Heading(1) with { Size = 37, Color = passes ? color : Palette.Paper };
+            var word = panel.Verdict switch { Verdict.Pass => "PASS", Verdict.Fail => "FAIL", _ => "NO VERDICT" };
+            var style = TextStyle.Heading(1) with { Size = panel.Verdict is null ? 17 : 37, Color = passes ? color : Palette.Paper };
             var field = SKRect.Create(x, y, wordWidth, topHeight);
             if (passes)
                 ink.Outline(SKRect.Create(x + 0.8f, y + 0.8f, wordWidth - 1.6f, topHeight - 1.6f), color, 1.6f);
@@ -87,7 +87,7 @@ internal static class TitlePageLayout
     /// <param name="width">Width, points.</param>
     public static Chunk Lay(SignOff signOff, float width)
     {
-        const float rowHeight = 27;
+        const float rowHeight = 25;
         var head = TextStyle.Label;
         var height = 14 + signOff.Roles.Length * rowHeight;
         float[] columns = [0, 0.16f, 0.44f, 0.80f];

@@ -12,6 +12,7 @@ internal static class RootCommandFactory
     {
         var root = new RootCommand("StackTiming checks a board's impedance, timing, matching and reflections from its stack-up and routed lengths.")
         {
+            CheckCommand.Create(cancellation),
             NetCommand.Create(cancellation),
             SectionCommand.Create(),
             LinesCommand.Create(cancellation),
