@@ -117,6 +117,9 @@ internal sealed class LayeredSection
             foreach (var y in StripModel.Heights(c, StripModel.HeightOf(c, section)))
                 heights.Add(y - bottom);
         }
+        // The space under a top plane ends there, also where no slab fills it.
+        if (section.TopPlaneMetres is { } top)
+            heights.Add(top - bottom);
         var highest = section.TopPlaneMetres - bottom ?? heights.Max;
         var least = 1e-7 * highest;
         var merged = new List<double>();

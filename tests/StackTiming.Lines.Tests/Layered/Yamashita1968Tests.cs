@@ -38,6 +38,19 @@ public sealed class Yamashita1968Tests
         Assert.Equal(-0.892e-12, c[0, 2], 0.892e-12 * 0.08);
     }
 
+    /// <summary>The inductance is that of the section in air: tests/references/sections, F5 and F8.</summary>
+    [Theory]
+    [InlineData("F5_stripline_offset_2d")]
+    [InlineData("F8_pair_stripline_2d")]
+    public void Air_under_a_top_plane_counts_where_no_slab_fills_it(string name)
+    {
+        var reference = ReferenceSections.Named(name);
+
+        var line = Form.Calculate(reference.Section with { Slabs = [] });
+
+        Assert.Equal(reference.Inductance[0, 0], line.InductanceHenryPerMetre[0, 0], 0.003 * reference.Inductance[0, 0]);
+    }
+
     [Fact]
     public void Impedance_falls_with_width_and_permittivity_stays_between_air_and_the_densest_dielectric() =>
         Lines.Sample(

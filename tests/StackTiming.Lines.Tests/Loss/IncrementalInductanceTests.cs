@@ -1,7 +1,9 @@
+using StackTiming.Lines.Fields;
 using StackTiming.Lines.Loss;
 using StackTiming.Lines.Materials;
 using StackTiming.Lines.Methods;
 using StackTiming.Lines.Sections;
+using StackTiming.Lines.Solutions;
 using Xunit;
 
 namespace StackTiming.Lines.Tests.Loss;
@@ -41,6 +43,17 @@ public sealed class IncrementalInductanceTests
         var line = IncrementalInductance.At(section, hertz, ClosedForms.Calculator)!;
 
         Assert.Equal(2 * SkinEffect.SurfaceResistanceOhms(Copper, hertz) / w, line.ResistanceOhmPerMetre[0, 0], 0.03 * line.ResistanceOhmPerMetre[0, 0]);
+    }
+
+    [Fact]
+    public void Offset_trapezoid_loses_as_much_by_the_closed_form_as_by_the_field_solver_and_as_much_upside_down()
+    {
+        var section = ReferenceSections.Named("F5_stripline_offset_2d").Section;
+        double R(CrossSection s, ILineCalculator calculator) => IncrementalInductance.At(s, 10e9, calculator)!.ResistanceOhmPerMetre[0, 0];
+        var closed = R(section, ClosedForms.Calculator);
+
+        Assert.Equal(R(section, new FieldSolver(FieldSolverOptions.Default)), closed, 0.05 * closed);
+        Assert.Equal(closed, R(Mirror.UpsideDown(section), ClosedForms.Calculator), 0.01 * closed);
     }
 
     [Fact]
