@@ -102,6 +102,19 @@ public sealed class Yamashita1968Tests
     }
 
     [Fact]
+    public void Space_under_the_upper_plane_counts_whether_air_is_written_as_a_slab_or_not()
+    {
+        var section = ReferenceSections.Named("F5_stripline_offset_2d").Section;
+        var top = section.TopPlaneMetres!.Value;
+        var written = section with { Slabs = [new DielectricSlab(SectionDielectric.Air, 0, top)] };
+        var halfWritten = section with { Slabs = [new DielectricSlab(SectionDielectric.Air, 0, 0.5 * top)] };
+
+        Assert.Equal(Form.Calculate(written).Z0Ohms, Form.Calculate(section with { Slabs = [] }).Z0Ohms, 9);
+        Assert.Equal(1, Form.Calculate(halfWritten).Z0Ohms / Form.Calculate(written).Z0Ohms, 1e-4);
+        Assert.Equal(1, Form.Calculate(written).InductanceHenryPerMetre[0, 0] / Form.Calculate(section).InductanceHenryPerMetre[0, 0], 1e-6);
+    }
+
+    [Fact]
     public void Vanishing_mask_is_no_mask()
     {
         var masked = ReferenceSections.Named("F2_microstrip_mask").Section;

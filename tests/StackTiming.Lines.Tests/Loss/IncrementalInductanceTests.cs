@@ -1,4 +1,5 @@
 using StackTiming.Lines.Fields;
+using StackTiming.Lines.Fields.Currents;
 using StackTiming.Lines.Loss;
 using StackTiming.Lines.Materials;
 using StackTiming.Lines.Methods;
@@ -43,6 +44,37 @@ public sealed class IncrementalInductanceTests
         var line = IncrementalInductance.At(section, hertz, ClosedForms.Calculator)!;
 
         Assert.Equal(2 * SkinEffect.SurfaceResistanceOhms(Copper, hertz) / w, line.ResistanceOhmPerMetre[0, 0], 0.03 * line.ResistanceOhmPerMetre[0, 0]);
+    }
+
+    /// <summary>
+    /// Judged by the current distribution of the field solver, which shares no step with the incremental inductance of the closed forms. Below the skin-effect limit both
+    /// interpolate, each in its own way.
+    /// </summary>
+    [Theory]
+    [InlineData("F1_microstrip_bare")]
+    [InlineData("F2_microstrip_mask")]
+    [InlineData("F3_embedded")]
+    [InlineData("F4_stripline_sym")]
+    [InlineData("F5_stripline_offset_2d")]
+    [InlineData("F6_stripline_3d")]
+    [InlineData("F7_pair_microstrip_mask")]
+    [InlineData("F8_pair_stripline_2d")]
+    [InlineData("F9_broadside")]
+    [InlineData("F10_coplanar_mask")]
+    [InlineData("F12_three_mask")]
+    [InlineData("h_stripline_thick_3")]
+    public void Resistance_agrees_with_the_current_distribution_of_the_field_solver(string name)
+    {
+        var section = ReferenceSections.Named(name).Section;
+        var judge = ConductorLoss.Of(FieldSolver.Default.Solve(section));
+        foreach (var (hertz, limit) in new[] { (1e8, 0.1), (1e9, 0.05), (100e9, 0.03) })
+        {
+            var expected = judge.At(hertz).ResistanceOhmPerMetre;
+            var actual = IncrementalInductance.At(section, hertz, ClosedForms.Calculator)!.ResistanceOhmPerMetre;
+            Assert.Equal(1, actual[0, 0] / expected[0, 0], limit);
+            if (section.Signals.Count() > 1)
+                Assert.Equal(expected[0, 1] / expected[0, 0], actual[0, 1] / actual[0, 0], 0.02);
+        }
     }
 
     [Fact]
