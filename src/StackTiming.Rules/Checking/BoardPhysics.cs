@@ -81,6 +81,13 @@ internal sealed class BoardPhysics : IBoardPhysics
         return null;
     }
 
+    public ReceiverResponse? ResponseWithAddedSeries(DrivenNet driven, string receiver, Edge edge, double addedOhms)
+    {
+        if (KeyOf(driven, edge, out _) is not { } key || waves.WithAddedSeries(key, addedOhms) is not { } wave)
+            return null;
+        return wave.Receivers.GetValueOrDefault(key.Net.FindPin(receiver));
+    }
+
     public double? FlightTime(DrivenNet driven, string receiver, Edge edge, out string objection)
     {
         if (KeyOf(driven, edge, out objection) is not { } key)

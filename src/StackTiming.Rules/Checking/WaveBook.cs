@@ -72,6 +72,20 @@ internal sealed class WaveBook(BoardNetwork networks, SignalAssumptions assumed)
         return wave;
     }
 
+    /// <summary>The responses with another resistance in series with the driver; not kept.</summary>
+    /// <param name="key">Net, driver and edge.</param>
+    /// <param name="addedOhms">Resistance to add, ohm.</param>
+    public SolvedWave? WithAddedSeries(WaveKey key, double addedOhms)
+    {
+        if (networks.Of(key.Net, key.DriverNode, new BoardEdge(key.Edge == Edge.Rise, null), out _) is not { } network)
+            return null;
+        var ohms = network.Driver.ResistanceOhms + addedOhms;
+        if (ohms <= 0)
+            return null;
+        var changed = network with { Driver = network.Driver with { ResistanceOhms = ohms } };
+        return Judge(key, changed, TransientSolver.Solve(changed), key.Net.Nodes[key.DriverNode].Pin!.Model!.Driver!);
+    }
+
     /// <summary>Solves a net again for its waveforms.</summary>
     /// <param name="key">Net, driver and edge.</param>
     /// <param name="objection">Why there is none.</param>

@@ -13,6 +13,8 @@ public enum FixKind
     SetGap,
     /// <summary>Put a resistor of <see cref="Fix.Value"/> ohms in series at the driver.</summary>
     SeriesResistor,
+    /// <summary>Drive with <see cref="Fix.Value"/> ohms in all, driver and series resistor together.</summary>
+    SourceResistance,
     /// <summary>Put a resistor of <see cref="Fix.Value"/> ohms at the receiver end.</summary>
     EndResistor,
     /// <summary>Let the receiver sample <see cref="Fix.Value"/> seconds later.</summary>

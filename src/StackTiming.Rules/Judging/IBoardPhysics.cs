@@ -66,4 +66,12 @@ public interface IBoardPhysics
     /// <param name="edge">The edge.</param>
     /// <param name="objection">Why there is no answer.</param>
     ReceiverResponse? Response(DrivenNet driven, string receiver, Edge edge, out string objection);
+
+    /// <summary>What a receiver would see with another resistance in series with the driver.</summary>
+    /// <param name="driven">The net from its driver.</param>
+    /// <param name="receiver">Receiver pin.</param>
+    /// <param name="edge">The edge.</param>
+    /// <param name="addedOhms">Resistance to add, ohm; negative to take away.</param>
+    /// <returns>The response, or null where there is none.</returns>
+    ReceiverResponse? ResponseWithAddedSeries(DrivenNet driven, string receiver, Edge edge, double addedOhms);
 }

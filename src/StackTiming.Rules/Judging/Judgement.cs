@@ -12,7 +12,11 @@ public sealed class Judgement(RuleHeader rule)
     // A value at its limit passes; rounding on the way to it must not decide.
     private const double Rounding = 1e-9;
 
+    // Trying fixes on the net costs waveforms; a rule that fails for thousands of nets has one cause, not thousands of fixes.
+    private const int MostTrials = 40;
+
     private readonly List<Finding> findings = [];
+    private int trials;
     private readonly List<GroupDelays> groups = [];
     private readonly List<JudgedWave> waves = [];
 
@@ -30,6 +34,9 @@ public sealed class Judgement(RuleHeader rule)
     /// <param name="window">The window, SI.</param>
     public static bool Holds(double value, Window window) => window.Margin(value) >= -Rounding * window.Scale(0);
 
+    /// <summary>Whether one more fix may be tried on its net; the first failures of a rule may.</summary>
+    public bool MayTry() => trials++ < MostTrials;
+
     /// <summary>Adds the finding of a value that was measured.</summary>
     /// <param name="subject">What was judged.</param>
     /// <param name="nets">The nets concerned.</param>
@@ -39,10 +46,11 @@ public sealed class Judgement(RuleHeader rule)
     /// <param name="method">How the value was computed.</param>
     /// <param name="explanation">The finding in plain words.</param>
     /// <param name="fix">What would mend it; used where the rule fails.</param>
+    /// <param name="leastScale">What a margin is measured against at least when findings are ranked, SI; for limits at or near zero.</param>
     /// <param name="relativeMargin">Rank of the margin, where it does not follow from the window.</param>
     public Finding Measured(
         string subject, ImmutableArray<string> nets, double value, Window window, DisplayUnit unit, string method, string explanation, Fix? fix,
-        double? relativeMargin = null)
+        double leastScale = 0, double? relativeMargin = null)
     {
         var margin = window.Margin(value);
         var holds = Holds(value, window);
@@ -56,7 +64,7 @@ public sealed class Judgement(RuleHeader rule)
             LowerLimit = window.Lower is { } low ? unit.FromSi(low) : null,
             UpperLimit = window.Upper is { } high ? unit.FromSi(high) : null,
             Margin = unit.FromSi(margin),
-            RelativeMargin = relativeMargin ?? margin / window.Scale(unit.SiPerUnit),
+            RelativeMargin = relativeMargin ?? margin / window.Scale(Math.Max(leastScale, unit.SiPerUnit)),
             Unit = unit,
             Method = method,
             Explanation = explanation,

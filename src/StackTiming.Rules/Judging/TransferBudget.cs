@@ -5,7 +5,9 @@ using StackTiming.Rules.RuleFiles;
 namespace StackTiming.Rules.Judging;
 
 /// <summary>Equations of a transfer: what remains of setup and hold.</summary>
-public abstract record TransferBudget
+/// <param name="SetupSeconds">Setup time of the receiver, s.</param>
+/// <param name="HoldSeconds">Hold time of the receiver, s.</param>
+public abstract record TransferBudget(double SetupSeconds, double HoldSeconds)
 {
     /// <summary>Name for findings.</summary>
     public abstract string Name { get; }
@@ -47,7 +49,7 @@ public abstract record TransferBudget
 /// <param name="JitterSeconds">Jitter, s.</param>
 public sealed record SourceSynchronousBudget(
     ReferenceNets Strobe, double ValidBeforeSeconds, double ValidAfterSeconds, double SetupSeconds, double HoldSeconds, double JitterSeconds)
-    : TransferBudget
+    : TransferBudget(SetupSeconds, HoldSeconds)
 {
     /// <inheritdoc/>
     public override string Name => "source-synchronous";
@@ -84,7 +86,7 @@ public sealed record SourceSynchronousBudget(
 /// <param name="JitterSeconds">Jitter from edge to edge, s; a hold check compares the same edge, so that it does not count there.</param>
 public sealed record CommonClockBudget(
     double PeriodSeconds, double TcoMinSeconds, double TcoMaxSeconds, string? LaunchClock, string? CaptureClock,
-    double SetupSeconds, double HoldSeconds, double SkewSeconds, double JitterSeconds) : TransferBudget
+    double SetupSeconds, double HoldSeconds, double SkewSeconds, double JitterSeconds) : TransferBudget(SetupSeconds, HoldSeconds)
 {
     /// <inheritdoc/>
     public override string Name => "common-clock";

@@ -70,7 +70,8 @@ public sealed record FirstWaveRule(RuleHeader Header, NetSet Nets, double Margin
         var window = Window.AtLeast(MarginVolts);
         var fix = Judgement.Holds(worst, window) ? null : FixOf(judged, at.Edge, at.Response);
         var finding = judgement.Measured(
-            judged.Subject, [judged.Driven.Net], worst, window, unit, ResponseText.Method(board), explanation, fix);
+            judged.Subject, [judged.Driven.Net], worst, window, unit, ResponseText.Method(board), explanation, fix,
+            ResponseText.RankShare * at.Response.SwingVolts);
         judgement.Drawn(new JudgedWave(judged.Driven.Net, judged.Driven.Driver, judged.Path.Receiver, at.Edge, Header.Id, finding.RelativeMargin ?? 0));
     }
 
@@ -91,7 +92,7 @@ public sealed record FirstWaveRule(RuleHeader Header, NetSet Nets, double Margin
             return null;
         return wanted > 0
             ? new Fix(
-                FixKind.SeriesResistor,
+                FixKind.SourceResistance,
                 $"drive it with at most {SeriesTermination.Show(wanted)} in all instead of {SeriesTermination.Show(source)} (driver and series resistor), or shorten the branches that the wave divides at",
                 judged.Driven.Net, "", wanted)
             : new Fix(FixKind.Other, "no driver is strong enough: reduce the number of branches that the first wave divides at", judged.Driven.Net, "", double.NaN);

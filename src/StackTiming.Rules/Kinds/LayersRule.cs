@@ -91,13 +91,14 @@ public sealed record LayersRule(
     private void Judge(IBoardPhysics board, Judgement judgement, string net, Dictionary<string, string?> wrong)
     {
         var traces = 0;
-        var outside = 0.0;
+        double outside = 0, whole = 0;
         var why = new SortedDictionary<string, double>(NaturalOrder.Instance);
         foreach (ref readonly var segment in board.SegmentsOf(net))
         {
             if (segment.Kind != SegmentKind.Trace)
                 continue;
             traces++;
+            whole += segment.LengthMetres;
             if (wrong.TryGetValue(segment.Layer, out var objection) && objection is null)
                 continue;
             outside += segment.LengthMetres;
@@ -116,7 +117,7 @@ public sealed record LayersRule(
         judgement.Measured(
             net, [net], outside, Window.AtMost(OutsideMetres), unit, "layers of the length list against the stack-up", explanation,
             outside > OutsideMetres ? new Fix(FixKind.Other, $"move {unit.Show(outside - OutsideMetres)} of {net} to {Proposal(wrong)}", net, "", double.NaN) : null,
-            outside == 0 ? 1 : null);
+            relativeMargin: outside == 0 ? 1 : (OutsideMetres - outside) / whole);
     }
 
     private string? Objection(StackUp stackUp, string layer)

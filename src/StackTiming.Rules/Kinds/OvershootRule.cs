@@ -78,14 +78,19 @@ public sealed record OvershootRule(
     private static string Show(double? volts, double? share) =>
         volts is { } v ? DisplayUnit.Millivolts.Show(v) : $"{DisplayUnit.Percent.Show(share ?? 0)} of the swing";
 
+    private double Limit(Edge edge, ReceiverResponse response)
+    {
+        var (volts, share) = edge == Edge.Rise ? (OverVolts, OverShare) : (UnderVolts, UnderShare);
+        return volts ?? share!.Value * response.SwingVolts;
+    }
+
     private void Judge(IBoardPhysics board, Judgement judgement, JudgedResponse judged)
     {
         var worst = double.PositiveInfinity;
         (Edge Edge, ReceiverResponse Response, double Limit) at = (judged.Responses[0].Edge, judged.Responses[0].Response, 0);
         foreach (var (edge, response) in judged.Responses)
         {
-            var (volts, share) = edge == Edge.Rise ? (OverVolts, OverShare) : (UnderVolts, UnderShare);
-            var limit = volts ?? share!.Value * response.SwingVolts;
+            var limit = Limit(edge, response);
             if (limit - response.OvershootVolts < worst)
                 (worst, at) = (limit - response.OvershootVolts, (edge, response, limit));
         }
@@ -94,7 +99,7 @@ public sealed record OvershootRule(
         var words = at.Edge == Edge.Rise ? "above its final level on the rising edge" : "below its final level on the falling edge";
         var explanation = $"{judged.Subject} goes {unit.Show(value)} {words} ({DisplayUnit.Percent.Show(value / at.Response.SwingVolts)} of its swing of {unit.Show(at.Response.SwingVolts)}); allowed is {unit.Show(at.Limit)}.";
         var window = Window.AtMost(at.Limit);
-        var fix = Judgement.Holds(value, window) ? null : SeriesTermination.Of(judged.Driven, judged.Path);
+        var fix = Judgement.Holds(value, window) ? null : SeriesTermination.Of(board, judged, judgement, (edge, r) => r.OvershootVolts <= Limit(edge, r));
         var finding = judgement.Measured(
             judged.Subject, [judged.Driven.Net], value, window, unit, ResponseText.Method(board), explanation, fix);
         judgement.Drawn(new JudgedWave(judged.Driven.Net, judged.Driven.Driver, judged.Path.Receiver, at.Edge, Header.Id, finding.RelativeMargin ?? 0));

@@ -48,19 +48,26 @@ public sealed record RingbackRule(RuleHeader Header, NetSet Nets, double MarginV
         return nets is null || margin is null ? null : new RingbackRule(header, nets, margin.Value, query);
     }
 
+    private static double? Threshold(Edge edge, ReceiverResponse response) => edge == Edge.Rise ? response.VihVolts : response.VilVolts;
+
+    private static double Beyond(Edge edge, ReceiverResponse response, double threshold)
+    {
+        var level = response.FirstLevelSeconds is null ? response.FinalVolts : response.RingbackVolts ?? response.FinalVolts;
+        return edge == Edge.Rise ? level - threshold : threshold - level;
+    }
+
     private void Judge(IBoardPhysics board, Judgement judgement, JudgedResponse judged)
     {
         var worst = double.PositiveInfinity;
         var at = judged.Responses[0];
         foreach (var (edge, response) in judged.Responses)
         {
-            if ((edge == Edge.Rise ? response.VihVolts : response.VilVolts) is not { } threshold)
+            if (Threshold(edge, response) is not { } threshold)
             {
                 judgement.Unchecked(judged.Subject, [judged.Driven.Net], $"the receiver at {judged.Path.Receiver} states no {(edge == Edge.Rise ? "vih" : "vil")}");
                 return;
             }
-            var level = response.FirstLevelSeconds is null ? response.FinalVolts : response.RingbackVolts ?? response.FinalVolts;
-            var beyond = edge == Edge.Rise ? level - threshold : threshold - level;
+            var beyond = Beyond(edge, response, threshold);
             if (beyond < worst)
                 (worst, at) = (beyond, (edge, response));
         }
@@ -69,11 +76,12 @@ public sealed record RingbackRule(RuleHeader Header, NetSet Nets, double MarginV
         var edgeText = at.Edge == Edge.Rise ? "rising" : "falling";
         var explanation = at.Response.FirstLevelSeconds is null
             ? $"{judged.Subject} never reaches {name} on the {edgeText} edge: it ends {unit.Show(-worst)} short of it."
-            : $"{judged.Subject} comes back to {unit.Show(worst)} {(worst < 0 ? "(across the threshold) " : "")}beyond {name} on the {edgeText} edge; {unit.Show(MarginVolts)} must remain.";
+            : $"{judged.Subject} comes back {(worst < 0 ? $"across {name} by {unit.Show(-worst)}" : $"to {unit.Show(worst)} beyond {name}")} on the {edgeText} edge; {unit.Show(MarginVolts)} must remain.";
         var window = Window.AtLeast(MarginVolts);
-        var fix = Judgement.Holds(worst, window) ? null : SeriesTermination.Of(judged.Driven, judged.Path);
+        var fix = Judgement.Holds(worst, window) ? null : SeriesTermination.Of(board, judged, judgement, (edge, r) => Judgement.Holds(Beyond(edge, r, Threshold(edge, r)!.Value), window));
         var finding = judgement.Measured(
-            judged.Subject, [judged.Driven.Net], worst, window, unit, ResponseText.Method(board), explanation, fix);
+            judged.Subject, [judged.Driven.Net], worst, window, unit, ResponseText.Method(board), explanation, fix,
+            ResponseText.RankShare * at.Response.SwingVolts);
         judgement.Drawn(new JudgedWave(judged.Driven.Net, judged.Driven.Driver, judged.Path.Receiver, at.Edge, Header.Id, finding.RelativeMargin ?? 0));
     }
 }

@@ -43,7 +43,7 @@ public sealed record SettlingRule(RuleHeader Header, NetSet Nets, double WithinS
             var (edge, response) = judged.Responses.MaxBy(r => r.Response.SettledSeconds);
             var value = response.SettledSeconds;
             var explanation = $"{judged.Subject} settles {unit.Show(value)} after the {(edge == Edge.Rise ? "rising" : "falling")} edge begins; it is sampled after {unit.Show(WithinSeconds)}.";
-            var fix = Judgement.Holds(value, window) ? null : FixOf(judged, value);
+            var fix = Judgement.Holds(value, window) ? null : FixOf(board, judged, judgement, value);
             var finding = judgement.Measured(
                 judged.Subject, [judged.Driven.Net], value, window, unit, ResponseText.Method(board), explanation, fix);
             judgement.Drawn(new JudgedWave(judged.Driven.Net, judged.Driven.Driver, judged.Path.Receiver, edge, Header.Id, finding.RelativeMargin ?? 0));
@@ -58,7 +58,7 @@ public sealed record SettlingRule(RuleHeader Header, NetSet Nets, double WithinS
         return nets is null || within is null ? null : new SettlingRule(header, nets, within.Value, query);
     }
 
-    private Fix FixOf(JudgedResponse judged, double value) =>
-        SeriesTermination.Of(judged.Driven, judged.Path) ?? new Fix(
+    private Fix FixOf(IBoardPhysics board, JudgedResponse judged, Judgement judgement, double value) =>
+        SeriesTermination.Of(board, judged, judgement, (_, response) => response.SettledSeconds <= WithinSeconds) ?? new Fix(
             FixKind.Later, $"sample {DisplayUnit.Picoseconds.Show(value - WithinSeconds)} later", judged.Driven.Net, "", value - WithinSeconds);
 }

@@ -146,10 +146,10 @@ public sealed record SetupHoldRule(RuleHeader Header, NetSet Nets, TransferBudge
         judgement.Measured(
             $"{subject}, setup", nets, setup, window, unit, method,
             $"{subject} has a setup margin of {unit.Show(setup)}: {Budget.SetupText(flight, reference)}; {unit.Show(MarginSeconds)} must remain.",
-            Judgement.Holds(setup, window) ? null : PathLength.Change(delay.Path, setup - MarginSeconds));
+            Judgement.Holds(setup, window) ? null : PathLength.Change(delay.Path, setup - MarginSeconds), Budget.SetupSeconds);
         judgement.Measured(
             $"{subject}, hold", nets, hold, window, unit, method,
             $"{subject} has a hold margin of {unit.Show(hold)}: {Budget.HoldText(flight, reference)}; {unit.Show(MarginSeconds)} must remain.",
-            Judgement.Holds(hold, window) ? null : PathLength.Change(delay.Path, MarginSeconds - hold));
+            Judgement.Holds(hold, window) ? null : PathLength.Change(delay.Path, MarginSeconds - hold), Budget.HoldSeconds);
     }
 }

@@ -117,6 +117,12 @@ internal sealed class TinyBoard : IBoardPhysics
     public double? FlightTime(DrivenNet driven, string receiver, Edge edge, out string objection) =>
         Response(driven, receiver, edge, out objection)?.FlightSeconds;
 
+    /// <summary>The response that a series resistor is said to give; by default it gives a clean one.</summary>
+    public Func<double, Edge, ReceiverResponse>? WithSeries { get; set; }
+
+    public ReceiverResponse? ResponseWithAddedSeries(DrivenNet driven, string receiver, Edge edge, double addedOhms) =>
+        WithSeries?.Invoke(addedOhms, edge) ?? (edge == Edge.Rise ? Responses.Clean : Responses.CleanFall);
+
     public ReceiverResponse? Response(DrivenNet driven, string receiver, Edge edge, out string objection)
     {
         objection = "the driver has no model";
