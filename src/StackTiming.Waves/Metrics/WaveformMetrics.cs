@@ -47,7 +47,7 @@ public static class WaveformMetrics
             SettleSeconds = trace.LastOutside(SettlingShare * swing),
             FlightTimeSeconds = firstMid - referenceMidSeconds,
             FirstIncident = firstVih is { } crossing && crossing <= trace.SecondsOf(pause),
-            FirstWaveVolts = trace.VoltsOf(pause),
+            FirstWaveVolts = trace.VoltsInPause(pause, 0.5 * stimulus.ShortestRampSeconds),
         };
     }
 
@@ -135,7 +135,8 @@ public static class WaveformMetrics
 
         public double SecondsOf(int i) => i * step;
 
-        public double VoltsOf(int i) => sign * At(i);
+        /// <summary>The voltage at the end of a pause: at its beginning the wave may still be a little short of what it brings.</summary>
+        public double VoltsInPause(int i, double spanSeconds) => sign * At(Math.Min(volts.Length - 1, i + Math.Max(1, (int)(spanSeconds / step))));
 
         private double Crossing(int i, double level) => step * (i - 1 + ((level - At(i - 1)) / (At(i) - At(i - 1))));
     }

@@ -12,6 +12,9 @@ namespace StackTiming.Rules.Tests.Checking;
 /// </summary>
 public sealed class WaveformRulesTests : IDisposable
 {
+    // 0.1 % of the swing, to which waveforms are computed.
+    private const double Millivolts = 1.2;
+
     private readonly BoardFolder folder = new();
 
     public void Dispose() => folder.Dispose();
@@ -46,20 +49,20 @@ public sealed class WaveformRulesTests : IDisposable
     [InlineData(50, 0)]
     [InlineData(100, 0)]
     public void Overshoot_is_what_the_doubled_first_wave_has_too_much(double sourceOhms, double millivolts) =>
-        Assert.Equal(millivolts, Only(sourceOhms, "{ id: O, kind: overshoot, nets: A, max: 100 mV }").Value!.Value, 1);
+        Assert.Equal(millivolts, Only(sourceOhms, "{ id: O, kind: overshoot, nets: A, max: 100 mV }").Value!.Value, Millivolts);
 
     [Fact]
     public void Ringback_is_the_first_wave_less_its_reflection_at_the_source()
     {
         // 1.6 V at first, then 1.6 V · (1 − 1/3) = 1.0667 V, which is 316.7 mV above vih.
-        Assert.Equal(1600 * 2 / 3.0 - 750, Only(25, "{ id: R, kind: ringback, nets: A, margin: 50 mV }").Value!.Value, 1);
+        Assert.Equal(1600 * 2 / 3.0 - 750, Only(25, "{ id: R, kind: ringback, nets: A, margin: 50 mV }").Value!.Value, Millivolts);
     }
 
     [Theory]
     [InlineData(100, 50)]
     [InlineData(130, -83.333)]
     public void The_first_wave_is_twice_the_share_of_the_line(double sourceOhms, double millivolts) =>
-        Assert.Equal(millivolts, Only(sourceOhms, "{ id: F, kind: first-wave, nets: A }").Value!.Value, 1);
+        Assert.Equal(millivolts, Only(sourceOhms, "{ id: F, kind: first-wave, nets: A }").Value!.Value, Millivolts);
 
     [Fact]
     public void The_fix_of_a_weak_first_wave_is_the_source_that_just_reaches_the_threshold()
