@@ -19,7 +19,8 @@ public class FieldSolverBenchmarks
     /// <summary>Families of the references, and buses of eight traces.</summary>
     public static IEnumerable<string> Families =>
     [
-        .. ReferenceSections.FiniteElement.Select(r => r.Name), "bus of 8, mask", "bus of 8, mask, uneven", "bus of 8, stripline", "bus of 8, stripline, uneven",
+        .. ReferenceSections.FiniteElement.Select(r => r.Name), "bus of 8, mask", "bus of 8, mask, uneven", "bus of 8, stripline",
+            "bus of 8, stripline, uneven",
     ];
 
     /// <summary>What is solved.</summary>
@@ -59,13 +60,16 @@ public class FieldSolverBenchmarks
         DielectricSlab Slab(string name, double dk, double bottom, double top) => new(new SectionDielectric(name, dk, 0), bottom, top);
         return surface
             ? new CrossSection(
-                [Slab("prepreg", 3.8, 0, 100e-6)], 0, null, [.. traces], new SectionMask(new SectionDielectric("mask", 3.5, 0), 25e-6, 15e-6), null, metal)
-            : new CrossSection([Slab("core", 4.1, 0, 100e-6), Slab("prepreg", 3.6, 100e-6, 300e-6)], 0, 300e-6, [.. traces], null, null, metal);
+                [Slab("prepreg", 3.8, 0, 100e-6)], 0, null, [.. traces],
+                    new SectionMask(new SectionDielectric("mask", 3.5, 0), 25e-6, 15e-6), null, metal)
+            : new CrossSection([Slab("core", 4.1, 0, 100e-6), Slab("prepreg", 3.6, 100e-6, 300e-6)], 0, 300e-6, [.. traces], null, null,
+                metal);
     }
 
     private sealed class Columns : ManualConfig
     {
-        public Columns() => AddColumn(new ErrorColumn("Error", s => Error(s.Coarse, s.Fine)), new ErrorColumn("Estimate", s => s.Coarse.Line.RelativeError));
+        public Columns() => AddColumn(new ErrorColumn("Error", s => Error(s.Coarse, s.Fine)),
+            new ErrorColumn("Estimate", s => s.Coarse.Line.RelativeError));
     }
 
     /// <summary>Largest relative error over the entries of C and L above a hundredth of the largest, against a solution to 1e-6.</summary>
@@ -76,7 +80,8 @@ public class FieldSolverBenchmarks
     private static double Error(double[,] coarse, double[,] fine)
     {
         var largest = fine.Cast<double>().Max(Math.Abs);
-        return fine.Cast<double>().Zip(coarse.Cast<double>()).Where(p => Math.Abs(p.First) > 0.01 * largest).Max(p => Math.Abs(p.Second / p.First - 1));
+        return fine.Cast<double>().Zip(coarse.Cast<double>()).Where(p => Math.Abs(p.First) > 0.01 * largest).Max(p =>
+            Math.Abs(p.Second / p.First - 1));
     }
 
     private sealed class ErrorColumn(string name, Func<(FieldSolution Coarse, FieldSolution Fine), double> figure) : IColumn

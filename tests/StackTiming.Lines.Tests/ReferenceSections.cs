@@ -10,10 +10,14 @@ namespace StackTiming.Lines.Tests;
 /// <param name="Section">The geometry in metres; dielectrics without loss.</param>
 /// <param name="Capacitance">Maxwell capacitance matrix, F/m.</param>
 /// <param name="Inductance">Inductance matrix, H/m.</param>
-/// <param name="Impedances">By the names of the file: z0, or z_odd, z_even, z_diff, z_common; ohm. Empty for three signals and more.</param>
+/// <param name="Impedances">
+/// By the names of the file: z0, or z_odd, z_even, z_diff, z_common; ohm. Empty for three signals and more.
+/// </param>
 /// <param name="EpsEff">By the names of the file: eps_eff, or eps_eff_odd and eps_eff_even.</param>
 /// <param name="EnergyShares">Share of the energy by dielectric name; empty where the file gives none.</param>
-/// <param name="RelativeError">Largest error estimate of the file (the mesh figure is of a coarser mesh than the results and is left out).</param>
+/// <param name="RelativeError">
+/// Largest error estimate of the file (the mesh figure is of a coarser mesh than the results and is left out).
+/// </param>
 public sealed record ReferenceSection(
     string Name,
     string Family,
@@ -28,7 +32,10 @@ public sealed record ReferenceSection(
     public override string ToString() => Name;
 }
 
-/// <summary>Reads the reference cross-sections. Sections with round conductors (coaxial, wires) are not cross-sections of a board and are left out.</summary>
+/// <summary>
+/// Reads the reference cross-sections. Sections with round conductors (coaxial, wires) are not cross-sections of a board and are left
+/// out.
+/// </summary>
 public static class ReferenceSections
 {
     private const double Millimetre = 1e-3;
@@ -91,7 +98,8 @@ public static class ReferenceSections
         var metal = new SectionMetal(1.7241e-8, 0);
         if (root.TryGetProperty("shape", out var shape))
             return shape.GetString() == "cpw" ? WideCoplanar(root, metal) : null;
-        var slabs = root.GetProperty("layers").EnumerateArray().Where(l => Optional(l, "y_top") is not null).Select(Slab).ToImmutableArray();
+        var slabs = root.GetProperty("layers").EnumerateArray().Where(l =>
+            Optional(l, "y_top") is not null).Select(Slab).ToImmutableArray();
         var planes = root.GetProperty("planes");
         var (bottom, top) = planes.ValueKind == JsonValueKind.Array
             ? (Optional(planes[0]), Optional(planes[1]))
@@ -117,7 +125,8 @@ public static class ReferenceSections
 
     private static SectionMask? Mask(JsonElement mask) => mask.ValueKind == JsonValueKind.Null
         ? null
-        : new SectionMask(new SectionDielectric("mask", mask.GetProperty("eps").GetDouble(), 0), Metres(mask, "m_lam"), Metres(mask, "m_cu"));
+        : new SectionMask(new SectionDielectric("mask", mask.GetProperty("eps").GetDouble(), 0), Metres(mask, "m_lam"),
+            Metres(mask, "m_cu"));
 
     /// <summary>
     /// A coplanar line as a section can hold it: the infinite grounds and the infinite substrate become 2000 times as large as the slot
@@ -132,7 +141,8 @@ public static class ReferenceSections
             [new DielectricSlab(new SectionDielectric("substrate", eps, 0), -span, 0)],
             null,
             null,
-            [new SectionConductor("a", false, 0, width, width, 0, 0, true), ground, ground with { Name = "g2", CentreMetres = -ground.CentreMetres }],
+            [new SectionConductor("a", false, 0, width, width, 0, 0, true), ground,
+                ground with { Name = "g2", CentreMetres = -ground.CentreMetres }],
             null,
             null,
             metal);

@@ -5,8 +5,8 @@ using StackTiming.Lines.Fields.Panels;
 namespace StackTiming.Lines.Fields;
 
 /// <summary>
-/// The electric field of a solved section under given voltages: evaluated anywhere, in the section's own coordinates. Inside conductors the potential is theirs and the
-/// field is zero up to the solver's error; a point on a surface gets the mean of both sides' fields.
+/// The electric field of a solved section under given voltages: evaluated anywhere, in the section's own coordinates. Inside conductors
+/// the potential is theirs and the field is zero up to the solver's error; a point on a surface gets the mean of both sides' fields.
 /// </summary>
 public sealed class DrivenField
 {
@@ -42,7 +42,8 @@ public sealed class DrivenField
             foreach (var (target, across) in new[] { (ex, 1.0), (ey, 0.0) })
             {
                 var points = Points(xMetres, yMetres, start, across, (1 - across) * (frame.Upright ? 1 : -1));
-                AddTo(target, start, points, (panel, mirrored, columns) => images.AddNormalField(panel, points, mirrored, 0, 0, columns, points.Padded));
+                AddTo(target, start, points, (panel, mirrored, columns) =>
+                    images.AddNormalField(panel, points, mirrored, 0, 0, columns, points.Padded));
             }
         }
 

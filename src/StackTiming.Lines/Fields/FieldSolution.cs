@@ -82,13 +82,28 @@ public sealed class FieldSolution
     }
 
     /// <summary>
-    /// The electric field in air when the signals have these voltages. Turned by a right angle and divided by the wave impedance of vacuum it is the magnetic
-    /// field of currents c·C₀·V with every dielectric present, because dielectrics do not carry magnetic flux differently from air.
+    /// The electric field in air when the signals have these voltages. Turned by a right angle and divided by the wave impedance of
+    /// vacuum it is the magnetic field of currents c·C₀·V with every dielectric present, because dielectrics do not carry magnetic flux
+    /// differently from air.
     /// </summary>
     public DrivenField DriveInAir(ReadOnlySpan<double> signalVolts)
     {
         CheckSignals(signalVolts.Length);
         return Field(Mesh.Empty, signalVolts);
+    }
+
+    /// <summary>The charge on every conductor and dielectric boundary when the signals have these voltages.</summary>
+    public IReadOnlyList<SurfaceCharge> SurfaceCharges(ReadOnlySpan<double> signalVolts)
+    {
+        CheckSignals(signalVolts.Length);
+        return SurfaceCharge.Of(this, new SolvedDrive(Mesh.Panels, Mesh.Filled, pairs.Volts(signalVolts)));
+    }
+
+    /// <summary>Relative permittivity at a point in metres, or null in a conductor and beyond a plane.</summary>
+    public double? PermittivityAt(double xMetres, double yMetres)
+    {
+        var medium = surfaces.Regions.At(frame.Apply(xMetres, yMetres));
+        return medium >= 0 ? surfaces.Regions.Media[medium].Dk : null;
     }
 
     /// <summary>The charges in air that carry these signal currents, in amperes, at the speed of light.</summary>

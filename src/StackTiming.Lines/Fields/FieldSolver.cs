@@ -14,17 +14,18 @@ namespace StackTiming.Lines.Fields;
 /// <summary>
 /// The 2-D quasi-static field solver: boundary elements for the total charge on conductors and dielectric boundaries
 /// (C. Wei, R. F. Harrington, J. R. Mautz and T. K. Sarkar, Multiconductor transmission lines in multilayered dielectric media, IEEE
-/// Trans. MTT-32, 1984; S. M. Rao, T. K. Sarkar and R. F. Harrington, The electrostatic field of conducting bodies in multiple dielectric media, IEEE
-/// Trans. MTT-32, 1984).
+/// Trans. MTT-32, 1984; S. M. Rao, T. K. Sarkar and R. F. Harrington, The electrostatic field of conducting bodies in multiple dielectric
+/// media, IEEE Trans. MTT-32, 1984).
 /// <para>
-/// Discretisation: Legendre polynomials on straight panels with a power map towards corners and edges, where the charge grows as a power of the
-/// distance (J. Meixner, The behavior of electromagnetic fields at edges, IEEE Trans. AP-20, 1972), integrated exactly through Legendre functions of the second kind and
-/// held at the Gauss nodes. Chosen over graded low-order panels because it reaches 1e-4 with a tenth of the unknowns: the error falls geometrically with the degree
-/// (I. Babuška and M. Suri, The p and h-p versions of the finite element method, SIAM Review 36, 1994). Planes are images, so they carry no unknowns.
+/// Discretisation: Legendre polynomials on straight panels with a power map towards corners and edges, where the charge grows as a power
+/// of the distance (J. Meixner, The behavior of electromagnetic fields at edges, IEEE Trans. AP-20, 1972), integrated exactly through
+/// Legendre functions of the second kind and held at the Gauss nodes. Chosen over graded low-order panels because it reaches 1e-4 with a
+/// tenth of the unknowns: the error falls geometrically with the degree (I. Babuška and M. Suri, The p and h-p versions of the finite
+/// element method, SIAM Review 36, 1994). Planes are images, so they carry no unknowns.
 /// </para>
 /// <para>
-/// Refinement: the degrees rise until two successive solutions agree within the tolerance. Their difference is the reported error; it belongs to the
-/// coarser of the two, so the result is better than it says.
+/// Refinement: the degrees rise until two successive solutions agree within the tolerance. Their difference is the reported error; it
+/// belongs to the coarser of the two, so the result is better than it says.
 /// </para>
 /// </summary>
 public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
@@ -73,7 +74,9 @@ public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
     }
 
     /// <summary>Solves a section to the tolerance.</summary>
-    /// <exception cref="SectionNotSolvableException">The section has no solution or is too fine to be followed; the message says where.</exception>
+    /// <exception cref="SectionNotSolvableException">
+    /// The section has no solution or is too fine to be followed; the message says where.
+    /// </exception>
     public FieldSolution Solve(CrossSection section)
     {
         SectionChecks.Check(section);
@@ -104,17 +107,25 @@ public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
     }
 
     private FieldSolution Result(
-        CrossSection section, SectionFrame frame, SectionSurfaces surfaces, ConductorPairs pairs, SolvedMesh mesh, double[,] inductance, double error)
+        CrossSection section,
+        SectionFrame frame,
+        SectionSurfaces surfaces,
+        ConductorPairs pairs,
+        SolvedMesh mesh,
+        double[,] inductance,
+        double error)
     {
         foreach (var value in mesh.FilledCapacitance.Cast<double>().Concat(inductance.Cast<double>()).Append(error))
         {
             if (!double.IsFinite(value))
-                throw new SectionNotSolvableException("The equations of the cross-section have no finite solution; its dimensions may be too far apart.");
+                throw new SectionNotSolvableException(
+                    "The equations of the cross-section have no finite solution; its dimensions may be too far apart.");
         }
 
         ImmutableArray<string> warnings = error <= options.RelativeTolerance
             ? []
-            : [string.Create(CultureInfo.InvariantCulture, $"The field solver stopped at an estimated error of {error:P2}; {options.RelativeTolerance:P2} was asked for.")];
+            : [string.Create(CultureInfo.InvariantCulture,
+                $"The field solver stopped at an estimated error of {error:P2}; {options.RelativeTolerance:P2} was asked for.")];
         var shares = EnergyPicture.Shares(mesh, surfaces.Regions.Media, EnergyPicture.StandardDrive(pairs.Signals));
         var line = new LineSolution(
             [.. section.Signals.Select(c => c.Name)], MethodId, mesh.FilledCapacitance, inductance, shares, error, warnings);
@@ -128,7 +139,9 @@ public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
         return (inverse * scale).ToArray();
     }
 
-    /// <summary>Largest difference of two matrices relative to the entry, or to a hundredth of the largest entry where it is smaller than that.</summary>
+    /// <summary>
+    /// Largest difference of two matrices relative to the entry, or to a hundredth of the largest entry where it is smaller than that.
+    /// </summary>
     private static double Difference(double[,] fine, double[,] coarse)
     {
         var largest = fine.Cast<double>().Max(Math.Abs);

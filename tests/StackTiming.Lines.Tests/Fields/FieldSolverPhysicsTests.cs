@@ -56,7 +56,8 @@ public sealed class FieldSolverPhysicsTests
     public void Charges_are_reciprocal_before_the_matrix_is_made_symmetric()
     {
         // An asymmetric pair with its two unit drives: each conductor's charge, read from the flux through a closed path round it.
-        var section = Section([Slab("laminate", 4.5, 0, 120)], [Trace("a", 0, 150, 120, 35, 120), Trace("b", 210, 90, 70, 50, 120)], mask: Mask(3.4, 20, 15));
+        var section = Section([Slab("laminate", 4.5, 0, 120)], [Trace("a", 0, 150, 120, 35, 120), Trace("b", 210, 90, 70, 50, 120)],
+            mask: Mask(3.4, 20, 15));
         var solution = Fine.Solve(section);
 
         var onB = FluxThroughRectangle(solution.Drive([1, 0]), section, 160e-6, 270e-6);
@@ -125,7 +126,8 @@ public sealed class FieldSolverPhysicsTests
         var pair = Fine.Solve(Section(
             [Slab("laminate", 4.0, 0, 100)], [Trace("a", -20_000, 120, 120, 35, 100), Trace("b", 20_000, 120, 120, 35, 100)])).Line;
 
-        Assert.Equal(single.CapacitanceFaradPerMetre[0, 0], pair.CapacitanceFaradPerMetre[0, 0], 1e-4 * single.CapacitanceFaradPerMetre[0, 0]);
+        Assert.Equal(single.CapacitanceFaradPerMetre[0, 0], pair.CapacitanceFaradPerMetre[0, 0],
+            1e-4 * single.CapacitanceFaradPerMetre[0, 0]);
         Assert.True(Math.Abs(pair.CapacitanceFaradPerMetre[0, 1]) < 1e-4 * pair.CapacitanceFaradPerMetre[0, 0]);
     }
 
@@ -164,12 +166,43 @@ public sealed class FieldSolverPhysicsTests
     [Fact]
     public void Potential_is_that_of_the_conductors_on_and_in_them_and_of_the_planes()
     {
-        var section = Section([Slab("a", 4, 0, 100), Slab("b", 3, 100, 260)], [Trace("x", -90, 100, 80, 30, 100), Trace("y", 90, 100, 80, 30, 100)], 260);
+        var section = Section([Slab("a", 4, 0, 100), Slab("b", 3, 100, 260)],
+            [Trace("x", -90, 100, 80, 30, 100), Trace("y", 90, 100, 80, 30, 100)], 260);
         var field = Fine.Solve(section).Drive([0.75, -0.25]);
 
         var volts = field.PotentialVolts([-90e-6, -60e-6, 90e-6, 0, 33e-6], [115e-6, 101e-6, 129e-6, 0, 260e-6]);
 
         Assert.Equal([0.75, 0.75, -0.25, 0, 0], volts, (a, b) => Math.Abs(a - b) < 1e-4);
+    }
+
+    [Fact]
+    public void Surface_charges_sum_to_those_of_the_capacitance_matrix()
+    {
+        var section = Section(
+            [Slab("a", 4, 0, 100)], [Trace("x", -90, 100, 80, 30, 100), Trace("y", 90, 100, 80, 30, 100)]) with { TopMask = Mask(4, 20,
+                20) };
+        var solution = FieldSolver.Default.Solve(section);
+        var c = solution.Line.CapacitanceFaradPerMetre;
+
+        // Slab and mask have one permittivity, so that all faces lie in it: free charge is four times the total.
+        var free = solution.SurfaceCharges([1, 0.25]).Where(s => s.Conductor == "x").Sum(s => 4 * s.CoulombPerMetre);
+
+        Assert.Equal(c[0, 0] + 0.25 * c[0, 1], free, 1e-4 * c[0, 0]);
+        Assert.Equal(4, solution.PermittivityAt(0, 110e-6));
+        Assert.Equal(1, solution.PermittivityAt(0, 130e-6));
+        Assert.Null(solution.PermittivityAt(90e-6, 110e-6));
+    }
+
+    [Fact]
+    public void Conductance_is_that_of_the_loss_tangent_in_one_dielectric()
+    {
+        var section = Section([Slab("m", 3.7, 0, 300)], [Trace("x", -90, 100, 80, 30, 100), Trace("y", 90, 100, 80, 30, 100)], 300);
+        section = section with { Slabs = [section.Slabs[0] with { Dielectric = new SectionDielectric("m", 3.7, 0.02) }] };
+        var solution = FieldSolver.Default.Solve(section);
+        var (loss, c) = (solution.LossCapacitance(), solution.Line.CapacitanceFaradPerMetre);
+
+        Assert.Equal(0.02 * c[0, 0], loss[0, 0], 1e-9 * c[0, 0]);
+        Assert.Equal(0.02 * c[0, 1], loss[0, 1], 1e-9 * c[0, 0]);
     }
 
     /// <summary>Flux of D out of a rectangle from the plane to far above, between two verticals, over the section's dielectrics.</summary>

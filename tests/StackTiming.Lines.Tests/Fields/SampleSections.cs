@@ -9,8 +9,10 @@ public static class SampleSections
 
     /// <summary>A trapezoid standing on its wide face, or hanging from it.</summary>
     public static SectionConductor Trace(
-        string name, double centre, double wide, double narrow, double thickness, double bottom, bool wideFaceDown = true, bool grounded = false) => new(
-        name, grounded, centre * Micrometre, wide * Micrometre, narrow * Micrometre, thickness * Micrometre, bottom * Micrometre, wideFaceDown);
+        string name, double centre, double wide, double narrow, double thickness, double bottom, bool wideFaceDown = true,
+            bool grounded = false) => new(
+        name, grounded, centre * Micrometre, wide * Micrometre, narrow * Micrometre, thickness * Micrometre, bottom * Micrometre,
+            wideFaceDown);
 
     /// <summary>A slab.</summary>
     public static DielectricSlab Slab(string name, double dk, double bottom, double top) =>
@@ -22,7 +24,8 @@ public static class SampleSections
 
     /// <summary>A section of copper over a plane at zero height, or between two planes.</summary>
     public static CrossSection Section(
-        IEnumerable<DielectricSlab> slabs, IEnumerable<SectionConductor> conductors, double? topPlane = null, SectionMask? mask = null) => new(
+        IEnumerable<DielectricSlab> slabs, IEnumerable<SectionConductor> conductors, double? topPlane = null, SectionMask? mask = null) =>
+            new(
         [.. slabs], 0, topPlane * Micrometre, [.. conductors], mask, null, new SectionMetal(1.7241e-8, 0));
 
     /// <summary>Traces of 120 µm at a pitch of 270 µm on 100 µm of prepreg, with or without mask.</summary>

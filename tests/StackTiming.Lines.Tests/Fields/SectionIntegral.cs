@@ -4,14 +4,18 @@ using StackTiming.Lines.Sections;
 namespace StackTiming.Lines.Tests.Fields;
 
 /// <summary>
-/// Area integrals over a section with one rectangular conductor, by Gauss rules whose nodes crowd at the lines through the conductor's corners: x from the
-/// corner grows as the cube of the parameter, which takes the growth of fields at corners out of the integrand. Independent of the solver's own integrals.
+/// Area integrals over a section with one rectangular conductor, by Gauss rules whose nodes crowd at the lines through the conductor's
+/// corners: x from the corner grows as the cube of the parameter, which takes the growth of fields at corners out of the integrand.
+/// Independent of the solver's own integrals.
 /// </summary>
 internal static class SectionIntegral
 {
     private const int Nodes = 14;
 
-    /// <summary>The integral of a density over the part of the section between two heights, to infinity on both sides (and above, without a top plane).</summary>
+    /// <summary>
+    /// The integral of a density over the part of the section between two heights, to infinity on both sides (and above, without a top
+    /// plane).
+    /// </summary>
     public static double Over(CrossSection section, double from, double to, Func<double[], double[], double[]> density)
     {
         var c = section.Conductors[0];

@@ -5,12 +5,12 @@ using StackTiming.Lines.Sections;
 namespace StackTiming.Lines.Fields.Currents;
 
 /// <summary>
-/// Series impedance of the copper of a solved section from direct current to skin effect, without roughness: resistance and internal inductance are the real and imaginary part of one
-/// function, so that they are causal together.
+/// Series impedance of the copper of a solved section from direct current to skin effect, without roughness: resistance and internal
+/// inductance are the real and imaginary part of one function, so that they are causal together.
 /// <para>
-/// A signal's own conductor: <see cref="PlateImpedance"/>, exact at direct current and in the skin-effect limit of the solved current distribution. Currents that a signal induces in
-/// other conductors: Z_s·spread·tanh(q), q = (1+j)·t/2δ of that conductor, which dies with the square of the frequency. Planes are thick against the skin depth:
-/// Z_s·spread.
+/// A signal's own conductor: <see cref="PlateImpedance"/>, exact at direct current and in the skin-effect limit of the solved current
+/// distribution. Currents that a signal induces in other conductors: Z_s·spread·tanh(q), q = (1+j)·t/2δ of that conductor, which dies
+/// with the square of the frequency. Planes are thick against the skin depth: Z_s·spread.
 /// </para>
 /// </summary>
 public sealed class ConductorLoss
@@ -19,7 +19,8 @@ public sealed class ConductorLoss
     private readonly CurrentSpread spread;
     private readonly int[] rows;
 
-    private ConductorLoss(CrossSection section, CurrentSpread spread, int[] rows) => (this.section, this.spread, this.rows) = (section, spread, rows);
+    private ConductorLoss(CrossSection section, CurrentSpread spread, int[] rows) =>
+        (this.section, this.spread, this.rows) = (section, spread, rows);
 
     /// <summary>Number of signals.</summary>
     public int Signals => spread.Planes.GetLength(0);
@@ -27,14 +28,17 @@ public sealed class ConductorLoss
     /// <summary>The loss of a solved section.</summary>
     /// <exception cref="SectionNotSolvableException">A conductor has no thickness.</exception>
     public static ConductorLoss Of(FieldSolution solution) => new(
-        solution.Section, CurrentSpread.Of(solution), [.. Enumerable.Range(0, solution.Section.Conductors.Length).Select(solution.Pairs.SignalRow)]);
+        solution.Section,
+        CurrentSpread.Of(solution),
+        [.. Enumerable.Range(0, solution.Section.Conductors.Length).Select(solution.Pairs.SignalRow)]);
 
     /// <summary>Resistance of each signal's own conductor to direct current, ohm per metre.</summary>
     public double[] DirectResistanceOhmPerMetre =>
         [.. section.Signals.Select(c => section.Metal.ResistivityOhmMetres / c.AreaSquareMetres)];
 
     /// <summary>
-    /// The resistance matrix under pure skin effect over the surface resistance, in 1/m, planes and grounded conductors included: what a roughness factor or another metal scales.
+    /// The resistance matrix under pure skin effect over the surface resistance, in 1/m, planes and grounded conductors included: what a
+    /// roughness factor or another metal scales.
     /// </summary>
     public double[,] SkinSpreadPerMetre()
     {

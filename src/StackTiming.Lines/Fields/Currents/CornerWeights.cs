@@ -5,14 +5,17 @@ using StackTiming.Lines.Sections;
 namespace StackTiming.Lines.Fields.Currents;
 
 /// <summary>
-/// Weights at a panel's Gauss nodes for the integral of the square of its density. Towards a corner of inner angle θ the density in air grows as the distance to the power of α - 1,
-/// α = π/(2π - θ) (J. Meixner, IEEE Trans. AP-20, 1972), so that per u its square is a power of u times a smooth function; the weights integrate that power exactly.
+/// Weights at a panel's Gauss nodes for the integral of the square of its density. Towards a corner of inner angle θ the density in air
+/// grows as the distance to the power of α - 1, α = π/(2π - θ) (J. Meixner, IEEE Trans. AP-20, 1972), so that per u its square is a power
+/// of u times a smooth function; the weights integrate that power exactly.
 /// </summary>
 internal static class CornerWeights
 {
     /// <summary>Weights w_k with ∫ K² ds = Σ w_k τ(u_k)², τ being the charge per u.</summary>
     /// <param name="panel">A panel of a conductor.</param>
-    /// <param name="innerAngle">Inner angle of the metal where the panel's parameter is zero, radians; π where the surface is straight.</param>
+    /// <param name="innerAngle">
+    /// Inner angle of the metal where the panel's parameter is zero, radians; π where the surface is straight.
+    /// </param>
     public static double[] Of(Panel panel, double innerAngle)
     {
         var rule = LegendreRule.Of(panel.Terms);

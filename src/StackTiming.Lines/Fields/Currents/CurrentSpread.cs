@@ -4,9 +4,10 @@ using StackTiming.Lines.Fields.Panels;
 namespace StackTiming.Lines.Fields.Currents;
 
 /// <summary>
-/// How current crowds on the surfaces of a section under skin effect. For unit currents i and j the integral of K_i K_j over a surface, in 1/m, times the surface resistance is
-/// the resistance matrix per metre (H. A. Wheeler, Formulas for the skin effect, Proc. IRE 30, 1942: the same as the incremental inductance of receding
-/// walls). At the corners of a trapezoid the square of the density is integrable.
+/// How current crowds on the surfaces of a section under skin effect. For unit currents i and j the integral of K_i K_j over a surface,
+/// in 1/m, times the surface resistance is the resistance matrix per metre (H. A. Wheeler, Formulas for the skin effect, Proc. IRE 30,
+/// 1942: the same as the incremental inductance of receding walls). At the corners of a trapezoid the square of the density is
+/// integrable.
 /// </summary>
 internal sealed class CurrentSpread
 {
@@ -23,7 +24,9 @@ internal sealed class CurrentSpread
     public double[] InternalInductance { get; }
 
     /// <summary>The spread in a solved section.</summary>
-    /// <exception cref="SectionNotSolvableException">A conductor has no thickness, so that the current at its edges has no finite loss.</exception>
+    /// <exception cref="SectionNotSolvableException">
+    /// A conductor has no thickness, so that the current at its edges has no finite loss.
+    /// </exception>
     public static CurrentSpread Of(FieldSolution solution)
     {
         foreach (var c in solution.Section.Conductors)
@@ -89,7 +92,8 @@ internal sealed class CurrentSpread
                 continue;
             var stations = PlaneStations.Along(section, height);
             var (x, weights) = (stations.X, stations.Weights);
-            double[][] densities = [.. drives.Select(d => ReturnCurrent.PlaneDensity(solution.Field(d), height, height == section.BottomPlaneMetres ? 1 : -1, x))];
+            double[][] densities = [.. drives.Select(d =>
+                ReturnCurrent.PlaneDensity(solution.Field(d), height, height == section.BottomPlaneMetres ? 1 : -1, x))];
             var density = new double[drives.Length];
             for (var k = 0; k < x.Length; k++)
             {

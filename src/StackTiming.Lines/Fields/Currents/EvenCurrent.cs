@@ -6,8 +6,9 @@ using StackTiming.Lines.Sections;
 namespace StackTiming.Lines.Fields.Currents;
 
 /// <summary>
-/// What a conductor's inductance gains when its current spreads from the surface evenly over the metal, as direct current does. With the vector potential A of the even
-/// current, that is the mean of A over the area less its mean over the surface current (reciprocity of the two distributions).
+/// What a conductor's inductance gains when its current spreads from the surface evenly over the metal, as direct current does. With the
+/// vector potential A of the even current, that is the mean of A over the area less its mean over the surface current (reciprocity of the
+/// two distributions).
 /// </summary>
 internal static class EvenCurrent
 {
@@ -33,7 +34,8 @@ internal static class EvenCurrent
             {
                 var weight = rule.Weights[i] * rule.Weights[k] * width;
                 area += weight;
-                mean += weight * Potential(images, new Complex(c.CentreMetres + (rule.Nodes[k] - 0.5) * width, c.BottomMetres + height * c.ThicknessMetres))
+                mean += weight * Potential(images,
+                    new Complex(c.CentreMetres + (rule.Nodes[k] - 0.5) * width, c.BottomMetres + height * c.ThicknessMetres))
                     / (0.5 * (c.WideMetres + c.NarrowMetres));
             }
         }
@@ -42,7 +44,8 @@ internal static class EvenCurrent
     }
 
     /// <summary>The mean over the surface current of one ampere.</summary>
-    private static double SurfaceMean(FieldSolution solution, int conductor, SolvedDrive drive, List<(double Sign, Complex[] Corners)> images)
+    private static double SurfaceMean(
+        FieldSolution solution, int conductor, SolvedDrive drive, List<(double Sign, Complex[] Corners)> images)
     {
         var (sum, total) = (0.0, 0.0);
         var first = 0;
@@ -103,8 +106,8 @@ internal static class EvenCurrent
     }
 
     /// <summary>
-    /// ∫ ln r dA over a polygon, counter-clockwise: the divergence of r (ln r - 1/2)/2 is ln r, so that it is half the sum over the edges of the distance to the edge's line times
-    /// ∫ (ln r - 1/2) ds.
+    /// ∫ ln r dA over a polygon, counter-clockwise: the divergence of r (ln r - 1/2)/2 is ln r, so that it is half the sum over the edges
+    /// of the distance to the edge's line times ∫ (ln r - 1/2) ds.
     /// </summary>
     private static double LogarithmOver(Complex[] corners, Complex point)
     {

@@ -4,8 +4,8 @@ using StackTiming.Lines.Sections;
 namespace StackTiming.Lines.Fields.Currents;
 
 /// <summary>
-/// Stations along a plane that are close where the current in it changes fast: below the corners of conductors on the scale of their distance, and out to
-/// infinity (or, between two planes, to where nothing is left) as the inverse of the distance.
+/// Stations along a plane that are close where the current in it changes fast: below the corners of conductors on the scale of their
+/// distance, and out to infinity (or, between two planes, to where nothing is left) as the inverse of the distance.
 /// </summary>
 internal sealed class PlaneStations
 {
@@ -36,7 +36,9 @@ internal sealed class PlaneStations
 
         var (left, right) = (corners.Min(c => c.X), corners.Max(c => c.X));
         var highest = corners.Max(c => c.Distance);
-        var margin = section.BottomPlaneMetres is { } bottom && section.TopPlaneMetres is { } top ? 5 * (top - bottom) : (right - left) / 2 + 3 * highest;
+        var margin = section.BottomPlaneMetres is { } bottom && section.TopPlaneMetres is { } top
+            ? 5 * (top - bottom)
+            : (right - left) / 2 + 3 * highest;
         var stations = new PlaneStations();
         var open = section.BottomPlaneMetres is null || section.TopPlaneMetres is null;
         var middle = (left + right) / 2;

@@ -3,12 +3,13 @@ using System.Numerics;
 namespace StackTiming.Lines.Fields.Currents;
 
 /// <summary>
-/// Internal impedance of one conductor between direct current and skin effect: R·(a·f(q₁) + (1-a)·f(q₂)) with f(q) = q·coth(q), q = √(jωτ), the function of a
-/// plate with current on both faces (S. Ramo, J. R. Whinnery and T. Van Duzer, Fields and Waves in Communication Electronics, 3rd ed. 1994, ch. 3.17): the current first
-/// crowds from the middle to the sides of a flat trace and, at a higher frequency, from the inside to the faces. The two times follow from the inductance at direct
-/// current and from the skin-effect limit, so that both ends are exact; in between, a = 0.3 stays within 8 % of filaments (W. T. Weeks, L. L. Wu, M. F. McAllister and
-/// A. Singh, Resistive and inductive skin effect in rectangular conductors, IBM J. Res. Dev. 23, 1979) for widths of two to nine thicknesses.
-/// Being one analytic function its resistance and inductance are causal together.
+/// Internal impedance of one conductor between direct current and skin effect: R·(a·f(q₁) + (1-a)·f(q₂)) with f(q) = q·coth(q), q =
+/// √(jωτ), the function of a plate with current on both faces (S. Ramo, J. R. Whinnery and T. Van Duzer, Fields and Waves in
+/// Communication Electronics, 3rd ed. 1994, ch. 3.17): the current first crowds from the middle to the sides of a flat trace and, at a
+/// higher frequency, from the inside to the faces. The two times follow from the inductance at direct current and from the skin-effect
+/// limit, so that both ends are exact; in between, a = 0.3 stays within 8 % of filaments (W. T. Weeks, L. L. Wu, M. F. McAllister and A.
+/// Singh, Resistive and inductive skin effect in rectangular conductors, IBM J. Res. Dev. 23, 1979) for widths of two to nine
+/// thicknesses. Being one analytic function its resistance and inductance are causal together.
 /// </summary>
 internal sealed class PlateImpedance
 {

@@ -3,8 +3,8 @@ using StackTiming.Lines.Constants;
 namespace StackTiming.Lines.Fields.Currents;
 
 /// <summary>
-/// The return current in an infinite plane at frequencies where the skin depth is small against the section: its density is that of the charge in air
-/// times the speed of light (the magnetic field at a conductor is tangential as the electric one is normal).
+/// The return current in an infinite plane at frequencies where the skin depth is small against the section: its density is that of the
+/// charge in air times the speed of light (the magnetic field at a conductor is tangential as the electric one is normal).
 /// </summary>
 /// <param name="PlaneMetres">Height of the plane, in metres.</param>
 /// <param name="TotalAmperes">Current in the plane, positive against a positive signal current.</param>
@@ -30,7 +30,8 @@ public sealed record ReturnCurrent(
             throw new ArgumentException("the section has no plane at this height", nameof(planeMetres));
         var stations = PlaneStations.Along(section, planeMetres);
         var (x, weights) = (stations.X, stations.Weights);
-        var density = PlaneDensity(solution.Field(solution.Carry(signalAmperes)), planeMetres, planeMetres == section.BottomPlaneMetres ? 1 : -1, x);
+        var normal = planeMetres == section.BottomPlaneMetres ? 1 : -1;
+        var density = PlaneDensity(solution.Field(solution.Carry(signalAmperes)), planeMetres, normal, x);
         var magnitude = Cumulative(density, weights);
         var total = 0.0;
         for (var i = 0; i < x.Length; i++)
@@ -38,7 +39,9 @@ public sealed record ReturnCurrent(
         return new ReturnCurrent(planeMetres, total, x, density, At(0.025, x, magnitude), At(0.975, x, magnitude));
     }
 
-    /// <summary>The return current in every conductor at zero volts, in amperes by name, positive against a positive signal current.</summary>
+    /// <summary>
+    /// The return current in every conductor at zero volts, in amperes by name, positive against a positive signal current.
+    /// </summary>
     /// <param name="solution">The solved section.</param>
     /// <param name="signalAmperes">Current of each signal, in amperes.</param>
     public static IReadOnlyDictionary<string, double> InConductors(FieldSolution solution, ReadOnlySpan<double> signalAmperes)

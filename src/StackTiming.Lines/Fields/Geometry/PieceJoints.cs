@@ -69,7 +69,13 @@ internal static class PieceJoints
     }
 
     private static PieceEnd Kind(
-        SurfacePiece piece, Complex end, List<SurfacePiece> pieces, CrossSection section, bool half, double tolerance, Func<Complex, bool> goesOn)
+        SurfacePiece piece,
+        Complex end,
+        List<SurfacePiece> pieces,
+        CrossSection section,
+        bool half,
+        double tolerance,
+        Func<Complex, bool> goesOn)
     {
         if (goesOn(end) && piece.Conductor < 0)
             return PieceEnd.Smooth;

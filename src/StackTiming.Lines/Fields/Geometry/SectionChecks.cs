@@ -44,7 +44,9 @@ internal static class SectionChecks
             throw new SectionNotSolvableException(
                 "The cross-section has nothing at zero volts; give it a plane or a grounded conductor for the return current.");
         if (section.BottomPlaneMetres >= section.TopPlaneMetres)
-            throw new SectionNotSolvableException($"The top plane at {Micro(section.TopPlaneMetres.Value)} is not above the bottom plane at {Micro(section.BottomPlaneMetres.Value)}.");
+            throw new SectionNotSolvableException(
+                $"The top plane at {Micro(section.TopPlaneMetres.Value)} is not above the bottom plane at "
+                + $"{Micro(section.BottomPlaneMetres.Value)}.");
     }
 
     /// <summary>A length in micrometres for a message.</summary>
@@ -55,11 +57,14 @@ internal static class SectionChecks
         double[] numbers = [c.CentreMetres, c.WideMetres, c.NarrowMetres, c.ThicknessMetres, c.BottomMetres];
         if (!numbers.All(double.IsFinite))
             throw new SectionNotSolvableException($"Conductor {c.Name} has a dimension that is not a finite number.");
-        if (c.NarrowMetres <= 0 || c.WideMetres < c.NarrowMetres)
+        if (c.NarrowMetres <= 0 || c.WideMetres * (1 + 1e-9) < c.NarrowMetres)
             throw new SectionNotSolvableException(
-                $"Conductor {c.Name} has faces {Micro(c.NarrowMetres)} and {Micro(c.WideMetres)} wide; the narrow one must be above zero and at most as wide as the wide one.");
+                $"Conductor {c.Name} has faces {Micro(c.NarrowMetres)} and {Micro(c.WideMetres)} wide; "
+                    + "the narrow one must be above zero and at most as wide as the wide one.");
         if (c.ThicknessMetres < 0)
-            throw new SectionNotSolvableException($"Conductor {c.Name} is {Micro(c.ThicknessMetres)} thick; the thickness must not be negative.");
+            throw new SectionNotSolvableException(
+                $"Conductor {c.Name} is {Micro(c.ThicknessMetres)} thick; "
+                + "the thickness must not be negative.");
         var slack = 1e-9 * (c.ThicknessMetres + Math.Abs(c.BottomMetres));
         if (c.BottomMetres < section.BottomPlaneMetres - slack || c.TopMetres > section.TopPlaneMetres + slack)
             throw new SectionNotSolvableException($"Conductor {c.Name} reaches through a plane; it must lie between the planes.");
@@ -71,11 +76,14 @@ internal static class SectionChecks
         {
             var slab = section.Slabs[i];
             if (!(slab.ThicknessMetres > 0) || !double.IsFinite(slab.TopMetres) || !double.IsFinite(slab.BottomMetres))
-                throw new SectionNotSolvableException($"Dielectric {slab.Dielectric.Name} is {Micro(slab.ThicknessMetres)} thick; the thickness must be above zero.");
+                throw new SectionNotSolvableException(
+                    $"Dielectric {slab.Dielectric.Name} is {Micro(slab.ThicknessMetres)} thick; "
+                    + "the thickness must be above zero.");
             CheckConstant(slab.Dielectric);
             if (i > 0 && Math.Abs(slab.BottomMetres - section.Slabs[i - 1].TopMetres) > 1e-6 * slab.ThicknessMetres)
                 throw new SectionNotSolvableException(
-                    $"Dielectric {slab.Dielectric.Name} starts at {Micro(slab.BottomMetres)} but the one below it ends at {Micro(section.Slabs[i - 1].TopMetres)}; slabs must touch.");
+                    $"Dielectric {slab.Dielectric.Name} starts at {Micro(slab.BottomMetres)} but the one below it ends at {Micro(section.Slabs[i - 1].TopMetres)}; "
+                        + "slabs must touch.");
         }
     }
 
@@ -84,7 +92,8 @@ internal static class SectionChecks
         if (mask is null)
             return;
         CheckConstant(mask.Dielectric);
-        if (!(mask.OverLaminateMetres >= 0 && mask.OverCopperMetres >= 0) || !double.IsFinite(mask.OverLaminateMetres + mask.OverCopperMetres))
+        if (!(mask.OverLaminateMetres >= 0 && mask.OverCopperMetres >= 0)
+            || !double.IsFinite(mask.OverLaminateMetres + mask.OverCopperMetres))
             throw new SectionNotSolvableException($"The {side} mask has a thickness that is negative or not a number.");
     }
 

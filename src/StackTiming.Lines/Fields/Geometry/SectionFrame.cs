@@ -34,7 +34,8 @@ internal readonly record struct SectionFrame(double OriginX, double OriginY, boo
             Slabs = [.. section.Slabs.Select(s => s with { BottomMetres = s.BottomMetres - dy, TopMetres = s.TopMetres - dy })],
             BottomPlaneMetres = section.BottomPlaneMetres - dy,
             TopPlaneMetres = section.TopPlaneMetres - dy,
-            Conductors = [.. section.Conductors.Select(c => c with { CentreMetres = c.CentreMetres - dx, BottomMetres = c.BottomMetres - dy })],
+            Conductors = [.. section.Conductors.Select(c =>
+                c with { CentreMetres = c.CentreMetres - dx, BottomMetres = c.BottomMetres - dy })],
         };
         return Upright ? moved : UpsideDown(moved);
     }

@@ -76,7 +76,8 @@ internal sealed class SectionSurfaces
         var (x, lower, upper) = (c.CentreMetres, c.LowerWidthMetres / 2, c.UpperWidthMetres / 2);
         if (c.ThicknessMetres <= 0)
         {
-            segments.Add(new Segment(new Complex(x - c.WideMetres / 2, c.BottomMetres), new Complex(x + c.WideMetres / 2, c.BottomMetres), index));
+            var (centre, side) = (new Complex(x, c.BottomMetres), new Complex(c.WideMetres / 2, 0));
+            segments.Add(new Segment(centre - side, centre + side, index));
             return;
         }
 
@@ -155,7 +156,8 @@ internal sealed class SectionSurfaces
         throw new SectionNotSolvableException(
             a == SectionRegions.Plane || b == SectionRegions.Plane
                 ? $"Signal conductor {section.Conductors[~Math.Max(a, b)].Name} touches a plane; leave dielectric between them."
-                : $"Conductors {section.Conductors[~a].Name} and {section.Conductors[~b].Name} touch or overlap; leave a gap between them.");
+                : $"Conductors {section.Conductors[~a].Name} and {section.Conductors[~b].Name} touch or overlap; "
+                    + "leave a gap between them.");
     }
 
     private bool IsAtReach(Complex point) => Math.Abs(point.Real) >= Reach - tolerance;
@@ -165,14 +167,17 @@ internal sealed class SectionSurfaces
         foreach (var piece in Pieces.Where(p => p.Conductor < 0))
         {
             if (piece.End.Real >= Reach - tolerance || piece.End.Real <= -Reach + tolerance)
-                yield return piece with { Start = piece.End, End = 2 * piece.End - new Complex(0, piece.End.Imaginary), StartKind = PieceEnd.Smooth, Infinite = true };
+                yield return TailFrom(piece);
             if (piece.Start.Real >= Reach - tolerance || piece.Start.Real <= -Reach + tolerance)
-            {
-                var back = piece.Reversed();
-                yield return back with { Start = back.End, End = 2 * back.End - new Complex(0, back.End.Imaginary), StartKind = PieceEnd.Smooth, Infinite = true };
-            }
+                yield return TailFrom(piece.Reversed());
         }
     }
+
+    /// <summary>From the end of a piece straight on to infinity.</summary>
+    private static SurfacePiece TailFrom(SurfacePiece piece) => piece with
+    {
+        Start = piece.End, End = piece.End + piece.End.Real, StartKind = PieceEnd.Smooth, Infinite = true,
+    };
 
     private void CheckEverySignalShows()
     {
@@ -180,7 +185,9 @@ internal sealed class SectionSurfaces
         {
             var c = section.Conductors[i];
             if (!c.Grounded && (!half || c.CentreMetres > -tolerance) && !Pieces.Any(p => p.Conductor == i))
-                throw new SectionNotSolvableException($"Signal conductor {c.Name} lies inside another conductor; leave a gap between them.");
+                throw new SectionNotSolvableException(
+                    $"Signal conductor {c.Name} lies inside another conductor; "
+                    + "leave a gap between them.");
         }
     }
 }

@@ -3,7 +3,8 @@ using StackTiming.Lines.Fields.Panels;
 namespace StackTiming.Lines.Fields.Kernels;
 
 /// <summary>
-/// Points at which potentials or normal fields are wanted, as columns of coordinates that are filled up to whole groups of lanes by repeating the last point.
+/// Points at which potentials or normal fields are wanted, as columns of coordinates that are filled up to whole groups of lanes by
+/// repeating the last point.
 /// </summary>
 internal sealed class ChargePoints
 {

@@ -4,8 +4,8 @@ using StackTiming.Lines.Fields.Panels;
 namespace StackTiming.Lines.Fields.Kernels;
 
 /// <summary>
-/// The integrals of <see cref="PanelIntegral"/> at points farther than one and a half lengths from the panel's middle, as the power series in the ratio of the
-/// half length to the distance; fourteen terms leave less than 1e-8.
+/// The integrals of <see cref="PanelIntegral"/> at points farther than one and a half lengths from the panel's middle, as the power
+/// series in the ratio of the half length to the distance; fourteen terms leave less than 1e-8.
 /// </summary>
 internal static class FarPanelIntegral
 {
@@ -16,7 +16,9 @@ internal static class FarPanelIntegral
 
     private static readonly double[][] PotentialMoments = [.. FieldMoments.Select(OverPower)];
 
-    /// <summary>See <see cref="PanelIntegral.Evaluate"/>; x and y from the panel's middle, <paramref name="square"/> their squares' sum.</summary>
+    /// <summary>
+    /// See <see cref="PanelIntegral.Evaluate"/>; x and y from the panel's middle, <paramref name="square"/> their squares' sum.
+    /// </summary>
     public static void Evaluate(
         Panel panel,
         Vector512<double> x,
@@ -98,7 +100,9 @@ internal static class FarPanelIntegral
         return moments;
     }
 
-    /// <summary>The moments over minus their power, as the logarithm's series has them; its constant is the logarithm of the distance.</summary>
+    /// <summary>
+    /// The moments over minus their power, as the logarithm's series has them; its constant is the logarithm of the distance.
+    /// </summary>
     private static double[] OverPower(double[] moments) =>
         [.. moments.Select((m, i) => i % (Powers + 1) == 0 ? 0 : -m / (i % (Powers + 1)))];
 }

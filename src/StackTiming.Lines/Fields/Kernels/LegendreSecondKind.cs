@@ -7,8 +7,8 @@ namespace StackTiming.Lines.Fields.Kernels;
 /// Legendre functions of the second kind Q_0 … Q_N of complex arguments, eight at once: the integrals of a Legendre polynomial
 /// against 1/(z - x) over -1…1 are 2 Q_n(z) (F. E. Neumann 1848; NIST Digital Library of Mathematical Functions, 14.12 and 14.10.3). On the
 /// segment itself the real part is the mean of both sides, the principal value.
-/// Near the segment the recurrence runs upwards, which loses about ρ^n of precision on the ellipse ρ; farther away it runs downwards as a continued
-/// fraction (W. Gautschi, Computational aspects of three-term recurrence relations, SIAM Review 9, 1967).
+/// Near the segment the recurrence runs upwards, which loses about ρ^n of precision on the ellipse ρ; farther away it runs downwards as a
+/// continued fraction (W. Gautschi, Computational aspects of three-term recurrence relations, SIAM Review 9, 1967).
 /// </summary>
 internal static class LegendreSecondKind
 {
@@ -16,7 +16,8 @@ internal static class LegendreSecondKind
     private const double DownwardsFrom = 2.5;
 
     // Upwards while rho^n stays below a million, which costs six of sixteen digits.
-    private static readonly double[] UpwardsBelow = [.. Enumerable.Range(0, MaxLast + 1).Select(n => n == 0 ? 1e9 : Math.Pow(1e6, 1.0 / n) + Math.Pow(1e6, -1.0 / n))];
+    private static readonly double[] UpwardsBelow =
+        [.. Enumerable.Range(0, MaxLast + 1).Select(n => n == 0 ? 1e9 : Math.Pow(1e6, 1.0 / n) + Math.Pow(1e6, -1.0 / n))];
 
     private static readonly double[] Rise = [.. Enumerable.Range(0, MaxLast + 1).Select(n => (2 * n + 1.0) / (n + 1))];
 

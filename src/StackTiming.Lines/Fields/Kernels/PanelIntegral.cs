@@ -5,9 +5,9 @@ namespace StackTiming.Lines.Fields.Kernels;
 
 /// <summary>
 /// The exact integrals of ln|z - s(u)| and 1/(z - s(u)) against the Legendre polynomials P_n(2u-1) of a panel, for eight points z at
-/// once in the panel's own coordinates (origin at zero, line along the real axis). With s = d·u^m the logarithm splits over the m roots of z/d,
-/// ln(z - d u^m) = ln d + Σ ln(w_j - u), each of which integrates to Legendre functions of the second kind; farther than
-/// one and a half lengths from the panel's middle a power series in the distance takes over.
+/// once in the panel's own coordinates (origin at zero, line along the real axis). With s = d·u^m the logarithm splits over the m roots
+/// of z/d, ln(z - d u^m) = ln d + Σ ln(w_j - u), each of which integrates to Legendre functions of the second kind; farther than one and
+/// a half lengths from the panel's middle a power series in the distance takes over.
 /// </summary>
 internal static class PanelIntegral
 {
@@ -20,8 +20,9 @@ internal static class PanelIntegral
     private const double HalfRootThree = 0.86602540378443864676;
 
     /// <summary>
-    /// Writes the potential integrals (without the integral of ln u that an infinite panel also has, a constant) to <paramref name="potential"/> or,
-    /// where it is empty, those of the complex field 1/(z - s) to <paramref name="fieldRe"/> and <paramref name="fieldIm"/>.
+    /// Writes the potential integrals (without the integral of ln u that an infinite panel also has, a constant) to <paramref
+    /// name="potential"/> or, where it is empty, those of the complex field 1/(z - s) to <paramref name="fieldRe"/> and <paramref
+    /// name="fieldIm"/>.
     /// </summary>
     public static void Evaluate(
         Panel panel,
@@ -67,7 +68,15 @@ internal static class PanelIntegral
     }
 
     private static void AddRoots(
-        int power, Vector512<double> re, Vector512<double> im, double length, int terms, Span<Vector512<double>> potential, Span<Vector512<double>> fieldRe, Span<Vector512<double>> fieldIm, Span<Vector512<double>> workspace)
+        int power,
+        Vector512<double> re,
+        Vector512<double> im,
+        double length,
+        int terms,
+        Span<Vector512<double>> potential,
+        Span<Vector512<double>> fieldRe,
+        Span<Vector512<double>> fieldIm,
+        Span<Vector512<double>> workspace)
     {
         var square = Vector512.Max(re * re + im * im, Vector512.Create(1e-200));
         var radius = Vector512.Exp(Vector512.Log(square) * (0.5 / power));
@@ -130,7 +139,14 @@ internal static class PanelIntegral
 
     /// <summary>∫ P_n ln|z - X/u| du = δ_n0 ln|z| + ∫ P_n ln|w - u| du - ∫ P_n ln u du with w = X/z.</summary>
     private static void AddInfinite(
-        Vector512<double> re, Vector512<double> im, double start, int terms, Span<Vector512<double>> potential, Span<Vector512<double>> fieldRe, Span<Vector512<double>> fieldIm, Span<Vector512<double>> workspace)
+        Vector512<double> re,
+        Vector512<double> im,
+        double start,
+        int terms,
+        Span<Vector512<double>> potential,
+        Span<Vector512<double>> fieldRe,
+        Span<Vector512<double>> fieldIm,
+        Span<Vector512<double>> workspace)
     {
         var square = Vector512.Max(re * re + im * im, Vector512.Create(1e-24));
         var (rootRe, rootIm) = (re / square, -im / square);

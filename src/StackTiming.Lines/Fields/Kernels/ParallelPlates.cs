@@ -6,9 +6,9 @@ using StackTiming.Lines.Fields.Panels;
 namespace StackTiming.Lines.Fields.Kernels;
 
 /// <summary>
-/// The images between two parallel planes beyond the nearest three. A unit line charge at z' between planes at y = 0 and y = b has the potential
-/// -ln|sinh(π(z-z')/2b) / sinh(π(z-z'*)/2b)| (P. M. Morse and H. Feshbach, Methods of Theoretical Physics, 1953, ch. 10). What is
-/// left of it without the charge and its first image in each plane is smooth on the scale of b and is summed with a Gauss rule.
+/// The images between two parallel planes beyond the nearest three. A unit line charge at z' between planes at y = 0 and y = b has the
+/// potential -ln|sinh(π(z-z')/2b) / sinh(π(z-z'*)/2b)| (P. M. Morse and H. Feshbach, Methods of Theoretical Physics, 1953, ch. 10). What
+/// is left of it without the charge and its first image in each plane is smooth on the scale of b and is summed with a Gauss rule.
 /// </summary>
 /// <param name="height">b in metres.</param>
 internal sealed class ParallelPlates(double height)
@@ -74,13 +74,15 @@ internal sealed class ParallelPlates(double height)
             for (var n = 0; n < weights.Length; n++)
                 weights[n] = rule.Weights[i % rule.Nodes.Length] / parts * LegendreRule.Polynomial(n, u);
             var point = panel.At(u);
-            sources[i] = new Source(point, Math.Exp(Math.Clamp(rate * (centre - point.Real), -Steepest, Steepest)), Math.Sin(rate * point.Imaginary), Math.Cos(rate * point.Imaginary), weights);
+            sources[i] = new Source(point, Math.Exp(Math.Clamp(rate * (centre - point.Real), -Steepest, Steepest)),
+                Math.Sin(rate * point.Imaginary), Math.Cos(rate * point.Imaginary), weights);
         }
 
         return sources;
     }
 
-    private Vector512<double> Potential(Vector512<double> x, Vector512<double> y, Vector512<double> sin, Vector512<double> cos, Vector512<double> growth, Source source)
+    private Vector512<double> Potential(Vector512<double> x, Vector512<double> y, Vector512<double> sin, Vector512<double> cos,
+        Vector512<double> growth, Source source)
     {
         var dx = x - Vector512.Create(source.Point.Real);
         var down = y - Vector512.Create(source.Point.Imaginary);
@@ -98,7 +100,8 @@ internal sealed class ParallelPlates(double height)
     }
 
     private Vector512<double> Field(
-        Vector512<double> x, Vector512<double> y, Vector512<double> sin, Vector512<double> cos, Vector512<double> growth, Vector512<double> normalX, Vector512<double> normalY, Source source)
+        Vector512<double> x, Vector512<double> y, Vector512<double> sin, Vector512<double> cos, Vector512<double> growth,
+            Vector512<double> normalX, Vector512<double> normalY, Source source)
     {
         var dx = x - Vector512.Create(source.Point.Real);
         var down = y - Vector512.Create(source.Point.Imaginary);
@@ -120,7 +123,8 @@ internal sealed class ParallelPlates(double height)
 
     /// <summary>κ coth(κζ) - 1/ζ, which tends to κ²ζ/3.</summary>
     private (Vector512<double> Re, Vector512<double> Im) NearestRemainder(
-        Vector512<double> dx, Vector512<double> down, Vector512<double> sinh, Vector512<double> cosh, Vector512<double> sinDown, Vector512<double> cosDown)
+        Vector512<double> dx, Vector512<double> down, Vector512<double> sinh, Vector512<double> cosh, Vector512<double> sinDown,
+            Vector512<double> cosDown)
     {
         var distance = dx * dx + down * down;
         var near = Vector512.LessThan(distance, Vector512.Create(1e-6 * height * height));

@@ -5,9 +5,9 @@ using StackTiming.Lines.Fields.Panels;
 namespace StackTiming.Lines.Fields.Kernels;
 
 /// <summary>
-/// Potential and field of the charge on a panel together with its images in the planes, so that the planes themselves carry no unknowns: none in open space,
-/// one image under one plane, and between two planes the three nearest images exactly with <see cref="ParallelPlates"/> for all the others.
-/// Units: charge over 2πε0, so that a unit line charge has the potential -ln r.
+/// Potential and field of the charge on a panel together with its images in the planes, so that the planes themselves carry no unknowns:
+/// none in open space, one image under one plane, and between two planes the three nearest images exactly with <see
+/// cref="ParallelPlates"/> for all the others. Units: charge over 2πε0, so that a unit line charge has the potential -ln r.
 /// </summary>
 /// <param name="hasPlane">True where a plane lies at y = 0.</param>
 /// <param name="topPlane">y of the upper plane in metres, or null.</param>
@@ -32,10 +32,12 @@ internal sealed class PlaneImages(bool hasPlane, double? topPlane)
     }
 
     /// <summary>
-    /// Adds the fields along the points' normals, laid out as potentials are. On the panel itself the field of its own charge has no normal part (the mean of both
-    /// sides): pass the rows of its own points, which must start empty, as <paramref name="ownStart"/> and <paramref name="ownCount"/>.
+    /// Adds the fields along the points' normals, laid out as potentials are. On the panel itself the field of its own charge has no
+    /// normal part (the mean of both sides): pass the rows of its own points, which must start empty, as <paramref name="ownStart"/> and
+    /// <paramref name="ownCount"/>.
     /// </summary>
-    public void AddNormalField(Panel panel, ChargePoints points, bool mirrored, int ownStart, int ownCount, Span<double> columns, int stride)
+    public void AddNormalField(Panel panel, ChargePoints points, bool mirrored, int ownStart, int ownCount, Span<double> columns,
+        int stride)
     {
         AddImage(panel, points, mirrored, 1, 0, 1, false, columns, stride);
         if (ownCount > 0)
@@ -53,7 +55,8 @@ internal sealed class PlaneImages(bool hasPlane, double? topPlane)
 
     /// <summary>The image of the panel is evaluated at the point that is the image of the wanted one: (±x, offset ± y).</summary>
     private static void AddImage(
-        Panel panel, ChargePoints points, bool mirrored, int upright, double offset, double sign, bool potentials, Span<double> columns, int stride)
+        Panel panel, ChargePoints points, bool mirrored, int upright, double offset, double sign, bool potentials, Span<double> columns,
+            int stride)
     {
         Span<Vector512<double>> first = stackalloc Vector512<double>[panel.Terms];
         Span<Vector512<double>> second = stackalloc Vector512<double>[panel.Terms];

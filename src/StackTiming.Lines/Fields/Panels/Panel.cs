@@ -34,9 +34,9 @@ internal sealed record Panel(SurfacePiece Piece, PanelMap Map, Complex Origin, C
     public Complex At(double u) => Origin + Distance(u) * Direction;
 
     /// <summary>
-    /// Sum of the half-axes of the ellipse about the parameter's range (mapped to -1…1) on which the point lies. Expansions in Legendre polynomials of a
-    /// function that is singular there converge as this number to the power of minus the degree (S. N. Bernstein 1912; L. N. Trefethen,
-    /// Approximation Theory and Approximation Practice, 2013, ch. 8).
+    /// Sum of the half-axes of the ellipse about the parameter's range (mapped to -1…1) on which the point lies. Expansions in Legendre
+    /// polynomials of a function that is singular there converge as this number to the power of minus the degree (S. N. Bernstein 1912;
+    /// L. N. Trefethen, Approximation Theory and Approximation Practice, 2013, ch. 8).
     /// </summary>
     public double Ellipse(Complex point)
     {

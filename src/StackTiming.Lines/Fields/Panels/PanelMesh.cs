@@ -61,7 +61,8 @@ internal sealed class PanelMesh
         if (piece.Infinite)
         {
             // The tail is measured from the vertical axis, where the section's charges are centred.
-            Refine(new Panel(piece, PanelMap.Infinite, new Complex(0, piece.Start.Imaginary), piece.Direction, Math.Abs(piece.Start.Real), 0));
+            Refine(new Panel(piece, PanelMap.Infinite, new Complex(0, piece.Start.Imaginary), piece.Direction, Math.Abs(piece.Start.Real),
+                0));
             return;
         }
 
@@ -101,7 +102,8 @@ internal sealed class PanelMesh
             panels.Add(panel with { Terms = degrees.Terms(panel, ellipse) });
             if (panels.Count > MostPanels)
                 throw new SectionNotSolvableException(
-                    $"The cross-section needs more than {MostPanels} panels; it has too many conductors or gaps too narrow beside its widths.");
+                    $"The cross-section needs more than {MostPanels} panels; "
+                        + "it has too many conductors or gaps too narrow beside its widths.");
             return;
         }
 

@@ -32,7 +32,9 @@ public enum ParameterKind
 
 /// <summary>A parameter of a cross-section that its results depend on.</summary>
 /// <param name="Kind">What it is.</param>
-/// <param name="Subject">Name of the dielectric or the conductor; <c>top mask</c> or <c>bottom mask</c> for the thicknesses of mask.</param>
+/// <param name="Subject">
+/// Name of the dielectric or the conductor; <c>top mask</c> or <c>bottom mask</c> for the thicknesses of mask.
+/// </param>
 /// <param name="Value">Its value in the section, in metres or without unit.</param>
 /// <param name="Scale">A change of it that matters, for the step of differences.</param>
 /// <param name="With">The section with another value of it.</param>

@@ -36,7 +36,8 @@ public static class SectionParameters
     {
         var slab = section.Slabs[index];
         return new SectionParameter(
-            ParameterKind.SlabThickness, slab.Dielectric.Name, slab.ThicknessMetres, slab.ThicknessMetres, t => Thicken(section, index, t - slab.ThicknessMetres));
+            ParameterKind.SlabThickness, slab.Dielectric.Name, slab.ThicknessMetres, slab.ThicknessMetres, t =>
+                Thicken(section, index, t - slab.ThicknessMetres));
     }
 
     /// <summary>Moves up everything that stands on the slab, lies above it or hangs from its upper face.</summary>
@@ -48,7 +49,8 @@ public static class SectionParameters
             || (c.BottomMetres > slab.BottomMetres + near && Math.Abs(c.TopMetres - slab.TopMetres) <= near);
         return section with
         {
-            Slabs = [.. section.Slabs.Select((s, i) => i < index ? s : s with { BottomMetres = i == index ? s.BottomMetres : s.BottomMetres + rise, TopMetres = s.TopMetres + rise })],
+            Slabs = [.. section.Slabs.Select((s, i) => i < index ? s
+                : s with { BottomMetres = i == index ? s.BottomMetres : s.BottomMetres + rise, TopMetres = s.TopMetres + rise })],
             TopPlaneMetres = section.TopPlaneMetres + rise,
             Conductors = [.. section.Conductors.Select(c => Moves(c) ? c with { BottomMetres = c.BottomMetres + rise } : c)],
         };
@@ -71,7 +73,8 @@ public static class SectionParameters
         var c = section.Conductors[index];
         CrossSection With(SectionConductor changed) => section with { Conductors = section.Conductors.SetItem(index, changed) };
         parameters.Add(new SectionParameter(
-            ParameterKind.Width, c.Name, c.WideMetres, c.NarrowMetres, w => With(c with { WideMetres = w, NarrowMetres = c.NarrowMetres + w - c.WideMetres })));
+            ParameterKind.Width, c.Name, c.WideMetres, c.NarrowMetres, w =>
+                With(c with { WideMetres = w, NarrowMetres = w - (c.WideMetres - c.NarrowMetres) })));
         parameters.Add(new SectionParameter(
             ParameterKind.Position, c.Name, c.CentreMetres, c.WideMetres, x => With(c with { CentreMetres = x })));
         if (c.ThicknessMetres <= 0)
@@ -82,7 +85,8 @@ public static class SectionParameters
         if (c.NarrowMetres < c.WideMetres)
         {
             parameters.Add(new SectionParameter(
-                ParameterKind.NarrowWidth, c.Name, c.NarrowMetres, Math.Min(c.WideMetres - c.NarrowMetres, c.NarrowMetres), w => With(c with { NarrowMetres = w })));
+                ParameterKind.NarrowWidth, c.Name, c.NarrowMetres, Math.Min(c.WideMetres - c.NarrowMetres, c.NarrowMetres), w =>
+                    With(c with { NarrowMetres = w })));
         }
     }
 
@@ -91,13 +95,15 @@ public static class SectionParameters
         if (mask.OverLaminateMetres > 0)
         {
             parameters.Add(new SectionParameter(
-                ParameterKind.MaskOverLaminate, subject, mask.OverLaminateMetres, mask.OverLaminateMetres, t => with(mask with { OverLaminateMetres = t })));
+                ParameterKind.MaskOverLaminate, subject, mask.OverLaminateMetres, mask.OverLaminateMetres, t =>
+                    with(mask with { OverLaminateMetres = t })));
         }
 
         if (mask.OverCopperMetres > 0)
         {
             parameters.Add(new SectionParameter(
-                ParameterKind.MaskOverCopper, subject, mask.OverCopperMetres, mask.OverCopperMetres, t => with(mask with { OverCopperMetres = t })));
+                ParameterKind.MaskOverCopper, subject, mask.OverCopperMetres, mask.OverCopperMetres, t =>
+                    with(mask with { OverCopperMetres = t })));
         }
     }
 }

@@ -1,14 +1,17 @@
+using StackTiming.Lines.Fields.Currents;
 using StackTiming.Lines.Sections;
 
 namespace StackTiming.Lines.Fields.Sensitivities;
 
 /// <summary>
-/// Derivatives of C and L with respect to every parameter of a section. Permittivities exactly, by the adjoint of the field equations; dimensions by central differences with two
-/// steps and Richardson's extrapolation (L. F. Richardson, Phil. Trans. R. Soc. A 226, 1927), whose last correction is the estimated error.
+/// Derivatives of a section's matrices with respect to every parameter. Of C with respect to permittivities exactly, by the adjoint of
+/// the field equations; everything else by central differences with two steps and Richardson's extrapolation (L. F. Richardson, Phil.
+/// Trans. R. Soc. A 226, 1927), whose last correction is the estimated error.
 /// </summary>
 public static class SectionSensitivities
 {
-    // One half and one per cent of the scale: the truncation of the extrapolated difference is below 1e-7 and the solver's own error some 1e-4.
+    // One half and one per cent of the scale: the truncation of the extrapolated difference is below 1e-7 and the solver's own error some
+    // 1e-4.
     private const double Step = 5e-3;
 
     /// <summary>The derivatives with respect to every parameter.</summary>
@@ -17,46 +20,49 @@ public static class SectionSensitivities
     {
         var solver = new FieldSolver(new FieldSolverOptions(1e-5));
         var solution = solver.Solve(section);
-        return [.. SectionParameters.Of(section).Select(p => p.Kind == ParameterKind.DielectricConstant ? Material(solution, p) : ByDifferences(solver, solution, p))];
+        return [.. SectionParameters.Of(section).Select(p => Of(solver, solution, p))];
     }
 
-    /// <summary>The derivative with respect to one parameter by differences.</summary>
+    /// <summary>The derivative with respect to one parameter by differences alone.</summary>
     public static SectionSensitivity ByDifferences(FieldSolver solver, FieldSolution solution, SectionParameter parameter)
     {
         var step = Step * parameter.Scale;
-        var (near, far) = (Difference(solver, parameter, step), Difference(solver, parameter, 2 * step));
-        var (capacitance, capacitanceError) = Extrapolate(near.C, far.C, solution.Line.CapacitanceFaradPerMetre, parameter.Scale);
-        var (inductance, inductanceError) = Extrapolate(near.L, far.L, solution.Line.InductanceHenryPerMetre, parameter.Scale);
-        return new SectionSensitivity(parameter, capacitance, inductance, Math.Max(capacitanceError, inductanceError));
+        var (near, far) = (new Difference(solver, parameter, step), new Difference(solver, parameter, 2 * step));
+        var capacitance = Extrapolate(near.Capacitance, far.Capacitance);
+        var inductance = Extrapolate(near.Inductance, far.Inductance);
+        var error = Math.Max(
+            Change(capacitance, near.Capacitance, solution.Line.CapacitanceFaradPerMetre),
+            Change(inductance, near.Inductance, solution.Line.InductanceHenryPerMetre));
+        return new SectionSensitivity(
+            parameter,
+            capacitance,
+            inductance,
+            near.Spread is null || far.Spread is null ? null : Extrapolate(near.Spread, far.Spread),
+            Extrapolate(near.Loss, far.Loss),
+            error * parameter.Scale);
     }
 
-    private static SectionSensitivity Material(FieldSolution solution, SectionParameter parameter) =>
-        new(parameter, solution.CapacitanceSlope(parameter.Subject), new double[solution.Pairs.Signals, solution.Pairs.Signals], 0);
-
-    private static (double[,] C, double[,] L) Difference(FieldSolver solver, SectionParameter parameter, double step)
+    private static SectionSensitivity Of(FieldSolver solver, FieldSolution solution, SectionParameter parameter)
     {
-        var up = solver.Solve(parameter.With(parameter.Value + step)).Line;
-        var down = solver.Solve(parameter.With(parameter.Value - step)).Line;
-        return (
-            Combine(up.CapacitanceFaradPerMetre, down.CapacitanceFaradPerMetre, 0.5 / step, -0.5 / step),
-            Combine(up.InductanceHenryPerMetre, down.InductanceHenryPerMetre, 0.5 / step, -0.5 / step));
-    }
-
-    private static (double[,] Slope, double Error) Extrapolate(double[,] near, double[,] far, double[,] value, double scale)
-    {
-        var slope = Combine(near, far, 4.0 / 3, -1.0 / 3);
-        var (largest, change) = (0.0, 0.0);
-        for (var i = 0; i < slope.GetLength(0); i++)
+        var differences = ByDifferences(solver, solution, parameter);
+        if (parameter.Kind != ParameterKind.DielectricConstant)
+            return differences;
+        // Magnetic fields and currents do not notice dielectrics.
+        var nothing = new double[solution.Pairs.Signals, solution.Pairs.Signals];
+        return differences with
         {
-            for (var j = 0; j < slope.GetLength(1); j++)
-            {
-                largest = Math.Max(largest, Math.Abs(value[i, j]));
-                change = Math.Max(change, Math.Abs(slope[i, j] - near[i, j]));
-            }
-        }
-
-        return (slope, change * scale / largest);
+            CapacitanceSlope = solution.CapacitanceSlope(parameter.Subject),
+            InductanceSlope = nothing,
+            SkinSpreadSlope = differences.SkinSpreadSlope is null ? null : nothing,
+            RelativeError = 0,
+        };
     }
+
+    private static double[,] Extrapolate(double[,] near, double[,] far) => Combine(near, far, 4.0 / 3, -1.0 / 3);
+
+    /// <summary>Largest change of the slopes over the largest entry of the matrix.</summary>
+    private static double Change(double[,] slope, double[,] near, double[,] value) =>
+        slope.Cast<double>().Zip(near.Cast<double>(), (a, b) => Math.Abs(a - b)).Max() / value.Cast<double>().Max(Math.Abs);
 
     private static double[,] Combine(double[,] a, double[,] b, double factorA, double factorB)
     {
@@ -68,5 +74,29 @@ public static class SectionSensitivities
         }
 
         return sum;
+    }
+
+    /// <summary>Central differences over one step.</summary>
+    private sealed class Difference
+    {
+        public Difference(FieldSolver solver, SectionParameter parameter, double step)
+        {
+            var up = solver.Solve(parameter.With(parameter.Value + step));
+            var down = solver.Solve(parameter.With(parameter.Value - step));
+            double[,] Slope(double[,] above, double[,] below) => Combine(above, below, 0.5 / step, -0.5 / step);
+            Capacitance = Slope(up.Line.CapacitanceFaradPerMetre, down.Line.CapacitanceFaradPerMetre);
+            Inductance = Slope(up.Line.InductanceHenryPerMetre, down.Line.InductanceHenryPerMetre);
+            Loss = Slope(up.LossCapacitance(), down.LossCapacitance());
+            if (up.Section.Conductors.All(c => c.ThicknessMetres > 0))
+                Spread = Slope(ConductorLoss.Of(up).SkinSpreadPerMetre(), ConductorLoss.Of(down).SkinSpreadPerMetre());
+        }
+
+        public double[,] Capacitance { get; }
+
+        public double[,] Inductance { get; }
+
+        public double[,] Loss { get; }
+
+        public double[,]? Spread { get; }
     }
 }

@@ -6,14 +6,26 @@ namespace StackTiming.Lines.Fields.Sensitivities;
 /// <param name="Parameter">The parameter.</param>
 /// <param name="CapacitanceSlope">dC/dp, farad per metre and unit of the parameter.</param>
 /// <param name="InductanceSlope">dL/dp, henry per metre and unit of the parameter.</param>
+/// <param name="SkinSpreadSlope">
+/// Derivative of the skin-effect resistance matrix over the surface resistance, 1/m and unit; null where a conductor has no thickness.
+/// </param>
+/// <param name="LossCapacitanceSlope">Derivative of the conductance matrix over the angular frequency, farad per metre and unit.</param>
 /// <param name="RelativeError">
 /// Estimated error of the slopes relative to C and L over the parameter's scale, from two steps; 0 where the slope is exact.
 /// </param>
-public sealed record SectionSensitivity(SectionParameter Parameter, double[,] CapacitanceSlope, double[,] InductanceSlope, double RelativeError)
+public sealed record SectionSensitivity(
+    SectionParameter Parameter,
+    double[,] CapacitanceSlope,
+    double[,] InductanceSlope,
+    double[,]? SkinSpreadSlope,
+    double[,] LossCapacitanceSlope,
+    double RelativeError)
 {
     /// <summary>
-    /// Derivatives of the characteristic impedance (ohm per unit) and the delay (seconds per metre and unit) of a drive: signal currents and voltages in the proportions of
-    /// <paramref name="drive"/>, such as 1 for a single line or +1/2, -1/2 for a pair, with Z² = (1/C₀)/(c²C) of the capacitances V'CV that the drive sees.
+    /// Derivatives of the characteristic impedance (ohm per unit) and the delay (seconds per metre and unit) of a drive: signal currents
+    /// and voltages in the proportions of
+    /// <paramref name="drive"/>, such as 1 for a single line or +1/2, -1/2 for a pair, with Z² = (1/C₀)/(c²C) of the capacitances V'CV
+    /// that the drive sees.
     /// </summary>
     /// <param name="line">The solution at the parameter's value.</param>
     /// <param name="drive">Voltage of each signal.</param>

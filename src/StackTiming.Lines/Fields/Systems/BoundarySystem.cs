@@ -86,8 +86,9 @@ internal sealed class BoundarySystem : IDisposable
     }
 
     /// <summary>
-    /// Adds to <paramref name="slopes"/>, by medium, the derivative of one conductor's free charge with respect to the permittivity of the medium,
-    /// by the adjoint of the equations (D. G. Cacuci, J. Math. Phys. 22, 1981): that of the weights, and that of the boundaries' contrasts.
+    /// Adds to <paramref name="slopes"/>, by medium, the derivative of one conductor's free charge with respect to the permittivity of
+    /// the medium, by the adjoint of the equations (D. G. Cacuci, J. Math. Phys. 22, 1981): that of the weights, and that of the
+    /// boundaries' contrasts.
     /// </summary>
     /// <param name="conductor">The conductor.</param>
     /// <param name="adjoint">Solution of the adjoint for its weights.</param>

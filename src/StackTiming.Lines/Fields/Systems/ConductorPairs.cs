@@ -19,7 +19,8 @@ internal sealed class ConductorPairs
         rows = new int[conductors.Length];
         for (var i = 0; i < rows.Length; i++)
             rows[i] = conductors[i].Grounded ? -1 : Signals++;
-        RightSignals = [.. Enumerable.Range(0, rows.Length).Where(i => rows[i] >= 0 && (!symmetric || twins[i] == i || conductors[i].CentreMetres > 0))];
+        RightSignals = [.. Enumerable.Range(0, rows.Length).Where(i => rows[i] >= 0
+            && (!symmetric || twins[i] == i || conductors[i].CentreMetres > 0))];
     }
 
     /// <summary>Number of conductors.</summary>

@@ -6,9 +6,10 @@ using StackTiming.Lines.Fields.Kernels;
 namespace StackTiming.Lines.Fields.Systems;
 
 /// <summary>
-/// LU factors of a dense matrix with row exchanges, right-looking in blocks (G. H. Golub and C. F. Van Loan, Matrix Computations, 4th ed. 2013, ch. 3.2 and 3.4).
-/// The library's managed factorisation is not blocked and takes several times as long at the sizes of a bus; figures are in the benchmarks' README.
-/// Matrices are column-major; the number of rows in store is a multiple of eight, the surplus rows zero.
+/// LU factors of a dense matrix with row exchanges, right-looking in blocks (G. H. Golub and C. F. Van Loan, Matrix Computations, 4th ed.
+/// 2013, ch. 3.2 and 3.4). The library's managed factorisation is not blocked and takes several times as long at the sizes of a bus;
+/// figures are in the benchmarks' README. Matrices are column-major; the number of rows in store is a multiple of eight, the surplus rows
+/// zero.
 /// </summary>
 internal sealed class DenseLu
 {

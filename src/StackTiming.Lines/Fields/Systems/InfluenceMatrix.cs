@@ -70,7 +70,10 @@ internal sealed class InfluenceMatrix : IDisposable
     /// <summary>Number of coefficients on conductors.</summary>
     public int ConductorUnknowns => FirstUnknown[ConductorPanels];
 
-    /// <summary>Copies the potentials at the conductor nodes from one coefficient, with its image's charge equal (+1), opposite (-1) or left out (0).</summary>
+    /// <summary>
+    /// Copies the potentials at the conductor nodes from one coefficient, with its image's charge equal (+1), opposite (-1) or left out
+    /// (0).
+    /// </summary>
     public void CopyPotentials(int unknown, int parity, Span<double> target) => Copy(unknown, parity, 0, target);
 
     /// <summary>Copies the normal fields at the first field nodes likewise.</summary>
@@ -112,6 +115,7 @@ internal sealed class InfluenceMatrix : IDisposable
         images.AddPotential(Panels[index], conductorPoints, mirrored, columns, stride);
         var isOwn = !mirrored && FieldRow[index] >= 0;
         images.AddNormalField(
-            Panels[index], fieldPoints, mirrored, isOwn ? FieldRow[index] : 0, isOwn ? Panels[index].Terms : 0, columns[fieldRows..], stride);
+            Panels[index], fieldPoints, mirrored, isOwn ? FieldRow[index] : 0, isOwn ? Panels[index].Terms : 0, columns[fieldRows..],
+                stride);
     }
 }

@@ -73,7 +73,8 @@ internal sealed class ParityCharges
     }
 
     /// <summary>
-    /// A unit voltage on one of a pair is half the even and half the odd drive; a conductor on the axis has its other half on the other side.
+    /// A unit voltage on one of a pair is half the even and half the odd drive; a conductor on the axis has its other half on the other
+    /// side.
     /// </summary>
     private void Add(double[,] matrix, Func<int, int, double> charge)
     {

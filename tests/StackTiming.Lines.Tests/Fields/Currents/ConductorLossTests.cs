@@ -41,8 +41,9 @@ public sealed class ConductorLossTests
     [Fact]
     public void Stripline_agrees_with_the_worked_example_of_the_textbook()
     {
-        // D. M. Pozar, Microwave Engineering, 4th ed. 2012, example 3.5 (from memory): b 3.2 mm, t 0.01 mm, eps 2.2, w 2.66 mm, copper, 10 GHz, Rs 0.026 ohm: Z0 50 ohm,
-        // attenuation by conductors 0.122 Np/m. His formula is Cohn's approximation of 1955; both figures are rounded.
+        // D. M. Pozar, Microwave Engineering, 4th ed. 2012, example 3.5 (from memory): b 3.2 mm, t 0.01 mm, eps 2.2, w 2.66 mm, copper,
+        // 10 GHz, Rs 0.026 ohm: Z0 50 ohm, attenuation by conductors 0.122 Np/m. His formula is Cohn's approximation of 1955; both
+        // figures are rounded.
         const double resistance = 0.026;
         var section = Section([Slab("m", 2.2, 0, 3200)], [Trace("a", 0, 2660, 2660, 10, 1595)], 3200);
         var solution = Fine.Solve(section);
@@ -76,7 +77,8 @@ public sealed class ConductorLossTests
         Assert.Equal(2, high[0, 0] / low[0, 0], 2e-3);
         Assert.Equal(2, high[0, 1] / low[0, 1], 2e-3);
         // Internal inductance of skin effect is R/omega.
-        Assert.Equal(high[0, 0] / (2 * Math.PI * 40e9), loss.At(40e9).InternalInductanceHenryPerMetre[0, 0], 5e-3 * high[0, 0] / (2 * Math.PI * 40e9));
+        Assert.Equal(high[0, 0] / (2 * Math.PI * 40e9), loss.At(40e9).InternalInductanceHenryPerMetre[0, 0],
+            5e-3 * high[0, 0] / (2 * Math.PI * 40e9));
     }
 
     [Fact]
@@ -111,14 +113,16 @@ public sealed class ConductorLossTests
             var (resistance, inductance) = loss.At(frequency);
 
             Assert.Equal(filaments.Real, resistance[0, 0] - plane, 0.08 * filaments.Real);
-            Assert.Equal(internalFilaments, inductance[0, 0] - plane / (2 * Math.PI * frequency), (frequency < 1e4 ? 0.005 : 0.08) * internalFilaments);
+            Assert.Equal(internalFilaments, inductance[0, 0] - plane / (2 * Math.PI * frequency),
+                (frequency < 1e4 ? 0.005 : 0.08) * internalFilaments);
         }
     }
 
     [Fact]
     public void A_strip_without_thickness_has_no_resistance()
     {
-        var error = Assert.Throws<SectionNotSolvableException>(() => ConductorLoss.Of(FieldSolver.Default.Solve(BareTrace(100, 100, 4, 0))));
+        var error = Assert.Throws<SectionNotSolvableException>(() =>
+            ConductorLoss.Of(FieldSolver.Default.Solve(BareTrace(100, 100, 4, 0))));
         Assert.Contains("Conductor a has no thickness", error.Message, StringComparison.Ordinal);
     }
 }

@@ -5,8 +5,8 @@ using StackTiming.Lines.Constants;
 namespace StackTiming.Lines.Tests.Fields.Currents;
 
 /// <summary>
-/// Series impedance of a rectangular trace over a perfect plane by filaments (W. T. Weeks, L. L. Wu, M. F. McAllister, A. Singh, IBM J. Res. Dev. 23, 1979): an independent
-/// solution in the volume of the copper.
+/// Series impedance of a rectangular trace over a perfect plane by filaments (W. T. Weeks, L. L. Wu, M. F. McAllister, A. Singh, IBM J.
+/// Res. Dev. 23, 1979): an independent solution in the volume of the copper.
 /// </summary>
 internal static class FilamentImpedance
 {
@@ -14,13 +14,16 @@ internal static class FilamentImpedance
     public static Complex Of(double width, double thickness, double height, double resistivity, double frequency, int across, int through)
     {
         var (xs, ys) = (Crowded(-width / 2, width / 2, across), Crowded(height, height + thickness, through));
-        var filaments = xs.Zip(xs.Skip(1)).SelectMany(x => ys.Zip(ys.Skip(1)), (x, y) => (X: (x.First + x.Second) / 2, Y: (y.First + y.Second) / 2, W: x.Second - x.First, H: y.Second - y.First)).ToArray();
+        var filaments = xs.Zip(xs.Skip(1)).SelectMany(x => ys.Zip(ys.Skip(1)), (x, y) =>
+            (X: (x.First + x.Second) / 2, Y: (y.First + y.Second) / 2, W: x.Second - x.First, H: y.Second - y.First)).ToArray();
         var omega = 2 * Math.PI * frequency;
         var impedance = Matrix<Complex>.Build.Dense(filaments.Length, filaments.Length, (i, j) =>
         {
             var (p, q) = (filaments[i], filaments[j]);
             var image = 0.5 * Math.Log((p.X - q.X) * (p.X - q.X) + (p.Y + q.Y) * (p.Y + q.Y));
-            return (i == j ? resistivity / (p.W * p.H) : 0) + new Complex(0, omega * Vacuum.Mu0 / (2 * Math.PI) * (image - (i == j ? Math.Log(0.2235 * (p.W + p.H)) : MeanLogarithm(p, q))));
+            return (i == j ? resistivity / (p.W * p.H) : 0)
+                + new Complex(0, omega * Vacuum.Mu0 / (2 * Math.PI) * (image - (i == j ? Math.Log(0.2235 * (p.W + p.H))
+                : MeanLogarithm(p, q))));
         });
         return 1 / impedance.Solve(MathNet.Numerics.LinearAlgebra.Vector<Complex>.Build.Dense(filaments.Length, Complex.One)).Sum();
     }

@@ -51,7 +51,8 @@ public sealed class ReturnCurrentTests
     public void Planes_and_pours_together_carry_all_of_the_current()
     {
         var section = Section(
-            [Slab("m", 4, 0, 150)], [Trace("a", 0, 150, 130, 35, 150), Trace("g1", -500, 600, 580, 35, 150, grounded: true), Trace("g2", 500, 600, 580, 35, 150, grounded: true)]);
+            [Slab("m", 4, 0, 150)], [Trace("a", 0, 150, 130, 35, 150), Trace("g1", -500, 600, 580, 35, 150, grounded: true),
+                Trace("g2", 500, 600, 580, 35, 150, grounded: true)]);
         var solution = Fine.Solve(section);
 
         var plane = ReturnCurrent.InPlane(solution, 0, [1]).TotalAmperes;

@@ -55,7 +55,8 @@ public sealed class PanelIntegralTests
             {
                 var order = n;
                 double Density(double v) => LegendreRule.Polynomial(order, v) * Math.Log(Math.Abs(point.Real - panel.Distance(v)));
-                var sum = DoubleExponentialTransformation.Integrate(Density, 0, u, 1e-13) + DoubleExponentialTransformation.Integrate(Density, u, 1, 1e-13);
+                var sum = DoubleExponentialTransformation.Integrate(Density, 0, u, 1e-13)
+                    + DoubleExponentialTransformation.Integrate(Density, u, 1, 1e-13);
                 Assert.Equal(sum, potential[n], 1e-7);
             }
         }
@@ -65,7 +66,8 @@ public sealed class PanelIntegralTests
     {
         var workspace = new Vector512<double>[PanelIntegral.Workspace];
         var (potential, re, im) = (new Vector512<double>[Terms], new Vector512<double>[Terms], new Vector512<double>[Terms]);
-        PanelIntegral.Evaluate(panel, Vector512.Create(point.Real), Vector512.Create(point.Imaginary), potential, default, default, workspace);
+        PanelIntegral.Evaluate(panel, Vector512.Create(point.Real), Vector512.Create(point.Imaginary), potential, default, default,
+            workspace);
         PanelIntegral.Evaluate(panel, Vector512.Create(point.Real), Vector512.Create(point.Imaginary), default, re, im, workspace);
         return ([.. potential.Select(p => p[3])], [.. re.Zip(im, (r, i) => new Complex(r[5], i[5]))]);
     }

@@ -34,7 +34,8 @@ public sealed class SectionSensitivitiesTests
     public void Slopes_of_permittivities_times_these_sum_to_the_capacitance()
     {
         // C is homogeneous of the first degree in all permittivities, air among them.
-        var section = Section([Slab("core", 4.2, 0, 90)], [Trace("a", 0, 120, 100, 35, 90), Trace("b", 190, 90, 80, 35, 90)], mask: Mask(3.6, 20, 15));
+        var section = Section([Slab("core", 4.2, 0, 90)], [Trace("a", 0, 120, 100, 35, 90), Trace("b", 190, 90, 80, 35, 90)],
+            mask: Mask(3.6, 20, 15));
         var solution = FieldSolver.Default.Solve(section);
 
         var (core, mask, air) = (solution.CapacitanceSlope("core"), solution.CapacitanceSlope("mask"), solution.CapacitanceSlope("air"));
@@ -102,8 +103,25 @@ public sealed class SectionSensitivitiesTests
         Assert.Equal((Odd(0.05) - Odd(-0.05)) / 0.1, z, 2e-3 * Math.Abs(z));
         // Delay per permittivity: share/(2 eps) of the delay.
         var share = line.EnergyShares.Single(s => s.Dielectric == "m").Share;
-        var odd = Math.Sqrt((line.CapacitanceFaradPerMetre[0, 0] - line.CapacitanceFaradPerMetre[0, 1]) * (line.InductanceHenryPerMetre[0, 0] - line.InductanceHenryPerMetre[0, 1]));
+        var odd = Math.Sqrt((line.CapacitanceFaradPerMetre[0, 0] - line.CapacitanceFaradPerMetre[0, 1]) * (line.InductanceHenryPerMetre[0,
+            0] - line.InductanceHenryPerMetre[0, 1]));
         Assert.InRange(odd * Vacuum.SpeedOfLight, 1, 2);
         Assert.Equal(odd * share / 8, delay, 1e-3 * delay);
+    }
+
+    [Fact]
+    public void Losses_of_parallel_plates_follow_their_dimensions()
+    {
+        // Skin spread 2/w and conductance tan(d)·C: their slopes with width and height are those of the formulas, up to the edges.
+        var plate = BareTrace(60_000, 100, 4);
+        var section = plate with { Slabs = [plate.Slabs[0] with { Dielectric = plate.Slabs[0].Dielectric with { Df = 0.01 } }] };
+        var slopes = SectionSensitivities.Of(section);
+        var width = slopes.Single(s => s.Parameter.Kind == ParameterKind.Width);
+        var height = slopes.Single(s => s.Parameter.Kind == ParameterKind.SlabThickness);
+
+        Assert.Equal(-2 / (60e-3 * 60e-3), width.SkinSpreadSlope![0, 0], 0.05 * 2 / (60e-3 * 60e-3));
+        Assert.Equal(0.01 * 4 * Vacuum.Epsilon0 / 100e-6, width.LossCapacitanceSlope[0, 0], 0.01 * 0.01 * 4 * Vacuum.Epsilon0 / 100e-6);
+        var conductance = 0.01 * 4 * Vacuum.Epsilon0 * 60e-3 / 100e-6;
+        Assert.Equal(-conductance / 100e-6, height.LossCapacitanceSlope[0, 0], 0.02 * conductance / 100e-6);
     }
 }
