@@ -1,4 +1,5 @@
 using StackTiming.Reports.Documents;
+using StackTiming.Waves.Methods;
 
 namespace StackTiming.Reports.Compliance;
 
@@ -24,6 +25,10 @@ internal static class MethodSection
                     m.WorstRelativeError > 0 ? Wording.Percent(m.WorstRelativeError, 1) : "exact", m.UsedFor);
             })],
             "Measured error: the largest error against independent reference cases, recomputed by the tests of the program.");
-        return new Section(Anchors.Methods, "Methods", [table], []);
+        var further = new Table(
+            [new Column("Method"), new Column("Computes"), new Column("Source", Grows: true), new Column("Holds for"), new Column("Held by tests to")],
+            [.. SupportingMethod.All.Select(m => Row.Of(RichText.Of(new Run(m.Name, Emphasis.Strong)), m.Purpose, m.Source, m.Validity, m.Proof))],
+            "Methods behind waveforms, losses, vias and materials.");
+        return new Section(Anchors.Methods, "Methods", [table, further], []);
     }
 }

@@ -11,6 +11,9 @@ namespace StackTiming.Rules.Boards;
 /// <param name="problems">Where problems go.</param>
 public sealed class BoardFiles(string boardPath, ProblemList problems)
 {
+    // Room for some two million routed segments; longer text does not fit into one string.
+    private const long LargestLengthList = 900L << 20;
+
     private readonly string home = Folder(Path.GetFullPath(boardPath));
     private readonly Dictionary<string, InputFile?> loaded = new(StringComparer.Ordinal);
     private readonly Dictionary<string, DataMap?> parsed = new(StringComparer.Ordinal);
@@ -50,7 +53,7 @@ public sealed class BoardFiles(string boardPath, ProblemList problems)
         var full = Path.GetFullPath(shown);
         if (loaded.TryGetValue(full, out var before))
             return before;
-        var file = InputFileLoader.Load(shown, from, problems);
+        var file = InputFileLoader.Load(shown, from, problems, role == "lengths" ? LargestLengthList : InputFileLoader.LargestFile);
         loaded[full] = file;
         if (file is not null)
             digests.Add(new InputDigest(role, file.Path, file.Sha256));

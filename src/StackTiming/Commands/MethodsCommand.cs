@@ -2,6 +2,7 @@ using System.CommandLine;
 using System.Globalization;
 using StackTiming.Lines.Methods;
 using StackTiming.Terminal;
+using StackTiming.Waves.Methods;
 
 namespace StackTiming.Commands;
 
@@ -43,6 +44,15 @@ internal static class MethodsCommand
                 output.WriteLine($"  measured: {Percent(error.ImpedanceError)} in impedance, {Percent(error.EpsEffError)} in effective permittivity ({error.CaseSet})");
             output.WriteLine();
         }
+        foreach (var method in SupportingMethod.All)
+        {
+            output.WriteLine($"{method.Id}  ({method.Name})");
+            output.WriteLine($"  {method.Purpose}");
+            output.WriteLine($"  source:   {method.Source}");
+            output.WriteLine($"  validity: {method.Validity}");
+            output.WriteLine($"  proof:    {method.Proof}");
+            output.WriteLine();
+        }
     }
 
     private static string Json() => JsonText.Of(writer =>
@@ -68,6 +78,17 @@ internal static class MethodsCommand
                 writer.WriteEndObject();
             }
             writer.WriteEndArray();
+            writer.WriteEndObject();
+        }
+        foreach (var method in SupportingMethod.All)
+        {
+            writer.WriteStartObject();
+            writer.WriteString("id", method.Id);
+            writer.WriteString("name", method.Name);
+            writer.WriteString("purpose", method.Purpose);
+            writer.WriteString("source", method.Source);
+            writer.WriteString("validity", method.Validity);
+            writer.WriteString("proof", method.Proof);
             writer.WriteEndObject();
         }
         writer.WriteEndArray();
