@@ -25,8 +25,9 @@ public sealed class DelayTable
 
     /// <summary>How the delays were computed, for findings.</summary>
     /// <param name="board">The board.</param>
-    public string MethodText(IBoardPhysics board) => Basis == DelayBasis.FlightTime
-        ? $"flight time against the reference load, rising edge; lines by {board.CalculatorName}"
+    /// <param name="edges">Which edges count.</param>
+    public string MethodText(IBoardPhysics board, string edges = "rising edge") => Basis == DelayBasis.FlightTime
+        ? $"flight time against the reference load, {edges}; lines by {board.CalculatorName}"
         : $"time of flight: line, via and package delays; lines by {board.CalculatorName}";
 
     /// <summary>Collects the delays of nets.</summary>
@@ -94,6 +95,9 @@ public sealed class DelayTable
 /// <param name="Delays">The delays.</param>
 public sealed record Comparison(string From, string To, ImmutableArray<ReceiverDelay> Delays)
 {
+    /// <summary>Number of different nets.</summary>
+    public int NetCount => Delays.Select(d => d.Driven.Net).Distinct(StringComparer.Ordinal).Count();
+
     /// <summary>Names a delay: its net, and its driver and receiver where there are several.</summary>
     /// <param name="delay">One of the delays.</param>
     public string SubjectOf(ReceiverDelay delay) =>

@@ -18,7 +18,7 @@ public sealed record FlightTimeRule(RuleHeader Header, NetSet Nets, Window Allow
     public static RuleKind Kind { get; } = new(
         "flight-time",
         "Delay from driver to each receiver, at least min and at most max.",
-        "flight time: first crossing of the receiver's threshold minus the crossing at the driver in its reference load; without models, time of flight",
+        "flight time: first crossing of the receiver's threshold minus the crossing at the driver in its reference load, the worse of both edges; without models, time of flight",
         [
             RuleKeys.Nets,
             new("min", "200 ps", false, "shortest allowed; at least one of min and max"),
@@ -34,7 +34,7 @@ public sealed record FlightTimeRule(RuleHeader Header, NetSet Nets, Window Allow
     public override string LimitText => Allowed.Show(DisplayUnit.Picoseconds);
 
     /// <inheritdoc/>
-    public override IEnumerable<NetNeed> Needs() => NetNeed.ForDelays(Nets.Names, Query);
+    public override IEnumerable<NetNeed> Needs() => NetNeed.ForDelays(Nets.Names, Query, [Edge.Rise, Edge.Fall]);
 
     /// <inheritdoc/>
     public override void Judge(IBoardPhysics board, Judgement judgement)
@@ -68,12 +68,14 @@ public sealed record FlightTimeRule(RuleHeader Header, NetSet Nets, Window Allow
     {
         var unit = DisplayUnit.Picoseconds;
         var net = delay.Driven.Net;
-        var holds = Judgement.Holds(delay.Seconds, Allowed);
+        var span = DelaySpan.Of(board, delay, table.Basis);
+        var seconds = Allowed.Margin(span.Earliest) < Allowed.Margin(span.Latest) ? span.Earliest : span.Latest;
+        var holds = Judgement.Holds(seconds, Allowed);
         var what = table.Basis == DelayBasis.FlightTime ? "flight time" : "time of flight";
-        var explanation = $"{net} has a {what} of {unit.Show(delay.Seconds)} from {delay.Driven.Driver} to {delay.Path.Receiver} over {DisplayUnit.Millimetres.Show(delay.Path.LengthMetres)} of trace; allowed is {LimitText}.";
+        var explanation = $"{net} has a {what} of {unit.Show(seconds)} from {delay.Driven.Driver} to {delay.Path.Receiver} over {DisplayUnit.Millimetres.Show(delay.Path.LengthMetres)} of trace; allowed is {LimitText}.";
         judgement.Measured(
-            subject, [net], delay.Seconds, Allowed, unit, table.MethodText(board), explanation,
-            holds ? null : PathLength.Change(delay.Path, Allowed.Nearest(delay.Seconds) - delay.Seconds));
-        return new NetDelay(net, delay.Driven.Driver, delay.Path.Receiver, delay.Seconds, delay.Path.LengthMetres, holds);
+            subject, [net], seconds, Allowed, unit, table.MethodText(board, "the worse of both edges"), explanation,
+            holds ? null : PathLength.Change(delay.Path, Allowed.Nearest(seconds) - seconds));
+        return new NetDelay(net, delay.Driven.Driver, delay.Path.Receiver, seconds, delay.Path.LengthMetres, holds);
     }
 }

@@ -44,7 +44,7 @@ public sealed record ImpedanceRule(
         foreach (var net in Nets?.Names ?? [])
             JudgeNet(board, judgement, net, [net], differential: false);
         foreach (var pair in Pairs ?? [])
-            JudgePair(board, judgement, pair);
+            JudgeNet(board, judgement, pair.Name, [pair.Positive, pair.Negative], differential: true);
     }
 
     private static ImpedanceRule? Read(RuleReader reader, RuleHeader header)
@@ -64,45 +64,29 @@ public sealed record ImpedanceRule(
         return new ImpedanceRule(header, nets, pairs is null ? null : [.. pairs], target.Value, ignore);
     }
 
-    private void JudgePair(IBoardPhysics board, Judgement judgement, PairRef pair)
+    private void JudgeNet(IBoardPhysics board, Judgement judgement, string subject, ImmutableArray<string> nets, bool differential)
     {
-        ImmutableArray<string> both = [pair.Positive, pair.Negative];
-        // Both members run through the same pair sections; the positive one stands for them, the negative one where only it states gaps.
-        var net = HasGap(board, pair.Positive) || !HasGap(board, pair.Negative) ? pair.Positive : pair.Negative;
-        JudgeNet(board, judgement, net, both, differential: true, pair.Name);
-    }
-
-    private static bool HasGap(IBoardPhysics board, string net)
-    {
-        foreach (ref readonly var segment in board.SegmentsOf(net))
-        {
-            if (segment.GapMetres > 0)
-                return true;
-        }
-        return false;
-    }
-
-    private void JudgeNet(IBoardPhysics board, Judgement judgement, string net, ImmutableArray<string> nets, bool differential, string? name = null)
-    {
-        var subject = name ?? net;
         Worst? worst = null;
         var judged = 0;
         string? objection = null;
-        foreach (ref readonly var segment in board.SegmentsOf(net))
+        foreach (var net in nets)
         {
-            if (segment.Kind != SegmentKind.Trace || (differential && segment.GapMetres <= 0) || segment.LengthMetres < IgnoreShorterMetres)
-                continue;
-            var line = board.LineOf(segment, out var why);
-            if (line is null || (differential && line.Pair is null))
+            foreach (ref readonly var segment in board.SegmentsOf(net))
             {
-                objection ??= why;
-                continue;
+                if (segment.Kind != SegmentKind.Trace || (differential && segment.GapMetres <= 0) || segment.LengthMetres < IgnoreShorterMetres)
+                    continue;
+                var line = board.LineOf(segment, out var why);
+                if (line is null || (differential && line.Pair is null))
+                {
+                    objection ??= why;
+                    continue;
+                }
+                judged++;
+                var ohms = differential ? line.Pair!.ZDiffOhms : line.Solution.Z0Ohms;
+                var margin = Allowed.Margin(ohms);
+                if (worst is null || margin < worst.Margin)
+                    worst = new Worst(segment, line, ohms, margin);
             }
-            judged++;
-            var ohms = differential ? line.Pair!.ZDiffOhms : line.Solution.Z0Ohms;
-            var margin = Allowed.Margin(ohms);
-            if (worst is null || margin < worst.Margin)
-                worst = new Worst(segment, line, ohms, margin);
         }
         if (worst is null || (objection is not null && Judgement.Holds(worst.Ohms, Allowed)))
         {

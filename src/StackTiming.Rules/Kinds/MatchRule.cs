@@ -44,12 +44,15 @@ public sealed record MatchRule(RuleHeader Header, NetSet Nets, double WithinSeco
         var table = DelayTable.Collect(board, Nets.Names, Query);
         foreach (var (net, reason) in table.Missing)
             judgement.Unchecked(net, [net], reason);
-        foreach (var comparison in table.Comparisons)
+        var compared = table.Comparisons.Where(c => c.NetCount > 1).ToArray();
+        foreach (var comparison in compared)
+            Judge(board, judgement, comparison, table);
+        // A net that alone reaches one part is matched all the same where it reaches another with the rest.
+        var matched = compared.SelectMany(c => c.Delays).Select(d => d.Driven.Net).ToHashSet(StringComparer.Ordinal);
+        foreach (var alone in table.Comparisons.Where(c => c.NetCount == 1).Select(c => c.Delays[0]))
         {
-            if (comparison.Delays.Select(d => d.Driven.Net).Distinct().Count() > 1)
-                Judge(board, judgement, comparison, table);
-            else
-                judgement.Unchecked(comparison.SubjectOf(comparison.Delays[0]), [comparison.Delays[0].Driven.Net], $"no other net of '{Nets.Text}' reaches {PinName.PartOf(comparison.Delays[0].Path.Receiver)}, so there is nothing to match it with");
+            if (matched.Add(alone.Driven.Net))
+                judgement.Unchecked(alone.Driven.Net, [alone.Driven.Net], $"no other net of '{Nets.Text}' reaches {alone.Path.Part}, so there is nothing to match it with");
         }
     }
 

@@ -142,7 +142,7 @@ public sealed record SetupHoldRule(RuleHeader Header, NetSet Nets, TransferBudge
         var setup = Budget.SetupMargin(flight, reference);
         var hold = Budget.HoldMargin(flight, reference);
         var window = Window.AtLeast(MarginSeconds);
-        var method = $"{Budget.Name} budget; {data.MethodText(board)}";
+        var method = $"{Budget.Name} budget; {data.MethodText(board, "both edges")}";
         judgement.Measured(
             $"{subject}, setup", nets, setup, window, unit, method,
             $"{subject} has a setup margin of {unit.Show(setup)}: {Budget.SetupText(flight, reference)}; {unit.Show(MarginSeconds)} must remain.",
