@@ -9,7 +9,7 @@ internal sealed class CoupledEnds
     private readonly WaveHistory[] near, far;
     private readonly double[] arrivingNear, arrivingFar;
 
-    public CoupledEnds(CoupledLines group, double stepSeconds, SteadyState steady, double[] initialVolts)
+    public CoupledEnds(CoupledLines group, double stepSeconds, double[] initialCurrents, double[] initialVolts)
     {
         this.group = group;
         var modes = group.Modes.Length;
@@ -26,7 +26,7 @@ internal sealed class CoupledEnds
             {
                 nearVolts += mode.Weights[k] * initialVolts[group.From[k]];
                 farVolts += mode.Weights[k] * initialVolts[group.To[k]];
-                amperes += mode.Pattern[k] * steady.ConductorCurrent(group, k, initialVolts);
+                amperes += mode.Pattern[k] * initialCurrents[k];
             }
             var delay = mode.DelaySeconds / stepSeconds;
             near[m] = new WaveHistory(delay, nearVolts + (mode.ImpedanceOhms * amperes));

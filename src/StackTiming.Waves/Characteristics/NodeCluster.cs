@@ -30,11 +30,6 @@ internal sealed record NodeCluster(int[] Nodes, double[] Inverse)
     public void Solve(double[] currents, double[] volts)
     {
         var n = Nodes.Length;
-        if (n == 1)
-        {
-            volts[Nodes[0]] = Inverse[0] * currents[Nodes[0]];
-            return;
-        }
         for (var i = 0; i < n; i++)
         {
             var sum = 0.0;

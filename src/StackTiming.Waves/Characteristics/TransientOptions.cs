@@ -8,7 +8,7 @@ public sealed record TransientOptions(int StepsPerRamp)
     public static TransientOptions Default { get; } = new(128);
 
     /// <summary>Change of voltage, as a share of the swing, below which a net counts as settled and the rest of the window is constant.</summary>
-    public const double Settled = 1e-7;
+    public const double Settled = 1e-5;
 
     /// <summary>Most steps of one run; a window that needs more is stepped more coarsely.</summary>
     public const int MostSteps = 4_000_000;

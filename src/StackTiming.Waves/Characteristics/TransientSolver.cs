@@ -38,6 +38,8 @@ public static class TransientSolver
         private readonly CapacitorState[] capacitors;
         private readonly InductorState[] inductors;
         private readonly NodeCluster[] clusters;
+        private readonly int[] loneNodes;
+        private readonly double[] loneOhms, arrivingFrom, arrivingTo;
 
         public Run(Network network, Circuit circuit, double step)
         {
@@ -53,16 +55,24 @@ public static class TransientSolver
             currents = new double[circuit.NodeCount];
             constant = new double[circuit.NodeCount];
             lineSiemens = Array.ConvertAll(circuit.Lines, l => 1 / l.Z0Ohms);
-            (fromEnds, toEnds) = Ends(steady);
-            groups = Array.ConvertAll(circuit.Groups, g => new CoupledEnds(g, step, steady, initial));
-            branches = Array.ConvertAll(circuit.Branches, b => new BranchState(b, step, steady.BranchCurrent(b, initial), initial));
+            (fromEnds, toEnds) = Ends(steady, source.InitialVolts);
+            groups = [.. circuit.Groups.Select((g, i) => new CoupledEnds(g, step, steady.GroupCurrents(i, source.InitialVolts), initial))];
+            branches = [.. circuit.Branches.Select((b, i) => new BranchState(b, step, steady.BranchCurrent(i, source.InitialVolts), initial))];
             capacitors = [.. circuit.Shunts.Where(s => s.CapacitanceFarads > 0).Select(s => new CapacitorState(s.Node, s.CapacitanceFarads, step))];
             inductors =
             [
-                .. circuit.Shunts.Where(s => s.InductanceHenries is not null)
-                    .Select(s => new InductorState(s.Node, s.InductanceHenries!.Value, step, SteadyState.ShuntCurrent(s, initial))),
+                .. circuit.Shunts.Select((s, i) => (Shunt: s, Current: steady.ShuntCurrent(i, source.InitialVolts)))
+                    .Where(s => s.Shunt.InductanceHenries is not null)
+                    .Select(s => new InductorState(s.Shunt.Node, s.Shunt.InductanceHenries!.Value, step, s.Current)),
             ];
-            clusters = Clusters();
+            arrivingFrom = new double[circuit.Lines.Length];
+            arrivingTo = new double[circuit.Lines.Length];
+            var all = Clusters();
+            // Most nodes stand alone between their lines: one product each, apart from the small matrices of the others.
+            clusters = Array.FindAll(all, c => c.Nodes.Length > 1);
+            var lone = Array.FindAll(all, c => c.Nodes.Length == 1);
+            loneNodes = Array.ConvertAll(lone, c => c.Nodes[0]);
+            loneOhms = Array.ConvertAll(lone, c => c.Inverse[0]);
             foreach (var shunt in circuit.Shunts)
             {
                 if (shunt.ResistanceOhms is { } ohms)
@@ -103,8 +113,11 @@ public static class TransientSolver
             for (var i = 0; i < lines.Length; i++)
             {
                 // What arrives at one end is what the other end sent.
-                currents[lines[i].From] += lineSiemens[i] * toEnds[i].Arriving(n);
-                currents[lines[i].To] += lineSiemens[i] * fromEnds[i].Arriving(n);
+                ref readonly var line = ref lines[i];
+                arrivingFrom[i] = toEnds[i].Arriving(n);
+                arrivingTo[i] = fromEnds[i].Arriving(n);
+                currents[line.From] += lineSiemens[i] * arrivingFrom[i];
+                currents[line.To] += lineSiemens[i] * arrivingTo[i];
             }
             foreach (var group in groups)
                 group.Prepare(n, currents);
@@ -115,14 +128,15 @@ public static class TransientSolver
             for (var i = 0; i < inductors.Length; i++)
                 currents[inductors[i].Node] -= inductors[i].Prepare(volts[inductors[i].Node]);
             volts.CopyTo(before, 0);
+            for (var i = 0; i < loneNodes.Length; i++)
+                volts[loneNodes[i]] = loneOhms[i] * currents[loneNodes[i]];
             foreach (var cluster in clusters)
                 cluster.Solve(currents, volts);
             for (var i = 0; i < lines.Length; i++)
             {
-                var arrivingFrom = toEnds[i].Arriving(n);
-                var arrivingTo = fromEnds[i].Arriving(n);
-                fromEnds[i].Send(n, (2 * volts[lines[i].From]) - arrivingFrom);
-                toEnds[i].Send(n, (2 * volts[lines[i].To]) - arrivingTo);
+                ref readonly var line = ref lines[i];
+                fromEnds[i].Send(n, (2 * volts[line.From]) - arrivingFrom[i]);
+                toEnds[i].Send(n, (2 * volts[line.To]) - arrivingTo[i]);
             }
             foreach (var group in groups)
                 group.Advance(n, volts);
@@ -141,14 +155,14 @@ public static class TransientSolver
             pin[n] = volts[network.Driver.Node];
         }
 
-        private (WaveHistory[] From, WaveHistory[] To) Ends(SteadyState steady)
+        private (WaveHistory[] From, WaveHistory[] To) Ends(SteadyState steady, double sourceVolts)
         {
             var from = new WaveHistory[circuit.Lines.Length];
             var to = new WaveHistory[circuit.Lines.Length];
             for (var i = 0; i < from.Length; i++)
             {
                 var line = circuit.Lines[i];
-                var drop = line.Z0Ohms * steady.LineCurrent(line, initial);
+                var drop = line.Z0Ohms * steady.LineCurrent(i, sourceVolts);
                 from[i] = new WaveHistory(line.DelaySeconds / step, initial[line.From] + drop);
                 to[i] = new WaveHistory(line.DelaySeconds / step, initial[line.To] - drop);
             }
