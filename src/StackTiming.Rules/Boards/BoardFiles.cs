@@ -14,7 +14,7 @@ public sealed class BoardFiles(string boardPath, ProblemList problems)
     // Room for some two million routed segments; longer text does not fit into one string.
     private const long LargestLengthList = 900L << 20;
 
-    private readonly string home = Folder(Path.GetFullPath(boardPath));
+    private readonly string home = Path.TrimEndingDirectorySeparator(Folder(Path.GetFullPath(boardPath))) + Path.DirectorySeparatorChar;
     private readonly Dictionary<string, InputFile?> loaded = new(StringComparer.Ordinal);
     private readonly Dictionary<string, DataMap?> parsed = new(StringComparer.Ordinal);
     private readonly HashSet<string> reported = new(StringComparer.Ordinal);

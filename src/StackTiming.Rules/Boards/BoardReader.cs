@@ -32,6 +32,11 @@ public sealed class BoardReader
     public static Board? Read(string path, ProblemList problems, CancellationToken cancellation)
     {
         var errors = problems.ErrorCount;
+        if (string.IsNullOrWhiteSpace(path) || path.Contains('\0', StringComparison.Ordinal))
+        {
+            problems.Error(FilePosition.WholeFile("board"), "the path of the board file is empty", "name a board file, such as board.yaml");
+            return null;
+        }
         var board = new BoardReader(path, problems, cancellation).Read(path);
         return problems.ErrorCount > errors ? null : board;
     }

@@ -15,6 +15,9 @@ namespace StackTiming.Rules.Checking;
 /// <summary>Answers what rules ask of a board, from its lines, paths and waveforms, each computed once.</summary>
 internal sealed class BoardPhysics : IBoardPhysics
 {
+    // Volts; less is rounding.
+    private const double LeastSwing = 1e-6;
+
     private readonly Board board;
     private readonly LineTable lines;
     private readonly PathTracer tracer;
@@ -75,10 +78,11 @@ internal sealed class BoardPhysics : IBoardPhysics
         objection = wave.Objection;
         if (objection.Length > 0)
             return null;
-        if (wave.Receivers.TryGetValue(key.Net.FindPin(receiver), out var response))
-            return response;
-        objection = $"{receiver} has no receiver model";
-        return null;
+        if (!wave.Receivers.TryGetValue(key.Net.FindPin(receiver), out var response))
+            objection = $"{receiver} has no receiver model";
+        else if (response.SwingVolts < LeastSwing)
+            objection = $"the driver does not move the level at {receiver}: a series capacitor or a short keeps direct current from it";
+        return objection.Length > 0 ? null : response;
     }
 
     public ReceiverResponse? ResponseWithAddedSeries(DrivenNet driven, string receiver, Edge edge, double addedOhms)

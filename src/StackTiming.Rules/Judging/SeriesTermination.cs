@@ -40,12 +40,14 @@ public static class SeriesTermination
         {
             return new Fix(
                 FixKind.Other,
-                $"no series resistor at {driven.Driver} mends it: take away the branch to {stub.End} ({DisplayUnit.Millimetres.Show(stub.LengthMetres)}), or run the net through it",
+                $"no series resistor at {driven.Driver} mends it: take away the branch to {stub.End} "
+                    + $"({DisplayUnit.Millimetres.Show(stub.LengthMetres)}), or run the net through it",
                 driven.Net, stub.Layer, double.NaN);
         }
         return new Fix(
             FixKind.EndResistor,
-            $"end the net at {judged.Path.Receiver} with {Show(line.Z0Ohms)} to the middle of the swing: no series resistor at {driven.Driver} mends it ({Show(line.Z0Ohms)} line, {Show(source + driven.SeriesOhms)} source)",
+            $"end the net at {judged.Path.Receiver} with {Show(line.Z0Ohms)} to the middle of the swing: no series resistor at "
+                + $"{driven.Driver} mends it ({Show(line.Z0Ohms)} line, {Show(source + driven.SeriesOhms)} source)",
             driven.Net, line.Layer, line.Z0Ohms);
     }
 

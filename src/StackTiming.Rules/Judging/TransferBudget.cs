@@ -67,11 +67,13 @@ public sealed record SourceSynchronousBudget(
 
     /// <inheritdoc/>
     public override string SetupText(DelaySpan data, DelaySpan reference) =>
-        $"valid {Ps(ValidBeforeSeconds)} before the strobe, less data {Ps(data.Latest)} against strobe {Ps(reference.Earliest)}, less setup {Ps(SetupSeconds)} and jitter {Ps(JitterSeconds)}";
+        $"valid {Ps(ValidBeforeSeconds)} before the strobe, less data {Ps(data.Latest)} against strobe {Ps(reference.Earliest)}, less "
+            + $"setup {Ps(SetupSeconds)} and jitter {Ps(JitterSeconds)}";
 
     /// <inheritdoc/>
     public override string HoldText(DelaySpan data, DelaySpan reference) =>
-        $"valid {Ps(ValidAfterSeconds)} after the strobe, plus data {Ps(data.Earliest)} against strobe {Ps(reference.Latest)}, less hold {Ps(HoldSeconds)} and jitter {Ps(JitterSeconds)}";
+        $"valid {Ps(ValidAfterSeconds)} after the strobe, plus data {Ps(data.Earliest)} against strobe {Ps(reference.Latest)}, less hold "
+            + $"{Ps(HoldSeconds)} and jitter {Ps(JitterSeconds)}";
 }
 
 /// <summary>One clock launches and captures the data.</summary>
@@ -104,9 +106,11 @@ public sealed record CommonClockBudget(
 
     /// <inheritdoc/>
     public override string SetupText(DelaySpan data, DelaySpan reference) =>
-        $"period {Ps(PeriodSeconds)}, plus clock difference {Ps(reference.Earliest)}, less clock-to-output {Ps(TcoMaxSeconds)}, data {Ps(data.Latest)}, setup {Ps(SetupSeconds)}, skew {Ps(SkewSeconds)} and jitter {Ps(JitterSeconds)}";
+        $"period {Ps(PeriodSeconds)}, plus clock difference {Ps(reference.Earliest)}, less clock-to-output {Ps(TcoMaxSeconds)}, data "
+            + $"{Ps(data.Latest)}, setup {Ps(SetupSeconds)}, skew {Ps(SkewSeconds)} and jitter {Ps(JitterSeconds)}";
 
     /// <inheritdoc/>
     public override string HoldText(DelaySpan data, DelaySpan reference) =>
-        $"clock-to-output {Ps(TcoMinSeconds)}, plus data {Ps(data.Earliest)}, less clock difference {Ps(reference.Latest)}, hold {Ps(HoldSeconds)} and skew {Ps(SkewSeconds)}";
+        $"clock-to-output {Ps(TcoMinSeconds)}, plus data {Ps(data.Earliest)}, less clock difference {Ps(reference.Latest)}, hold "
+            + $"{Ps(HoldSeconds)} and skew {Ps(SkewSeconds)}";
 }

@@ -66,7 +66,9 @@ public sealed record FirstWaveRule(RuleHeader Header, NetSet Nets, double Margin
         var unit = DisplayUnit.Millivolts;
         var name = at.Edge == Edge.Rise ? "vih" : "vil";
         var side = worst < 0 ? "short of" : "beyond";
-        var explanation = $"{judged.Subject}: the first wave of the {(at.Edge == Edge.Rise ? "rising" : "falling")} edge brings {unit.Show(at.Response.FirstWaveVolts!.Value)}, {unit.Show(Math.Abs(worst))} {side} {name}; {unit.Show(MarginVolts)} beyond it are wanted.";
+        var explanation = $"{judged.Subject}: the first wave of the {(at.Edge == Edge.Rise ? "rising" : "falling")} edge brings "
+            + $"{unit.Show(at.Response.FirstWaveVolts!.Value)}, {unit.Show(Math.Abs(worst))} {side} {name}; {unit.Show(MarginVolts)} "
+            + "beyond it are wanted.";
         var window = Window.AtLeast(MarginVolts);
         var fix = Judgement.Holds(worst, window) ? null : FixOf(judged, at.Edge, at.Response);
         var finding = judgement.Measured(
@@ -93,7 +95,8 @@ public sealed record FirstWaveRule(RuleHeader Header, NetSet Nets, double Margin
         return wanted > 0
             ? new Fix(
                 FixKind.SourceResistance,
-                $"drive it with at most {SeriesTermination.Show(wanted)} in all instead of {SeriesTermination.Show(source)} (driver and series resistor), or shorten the branches that the wave divides at",
+                $"drive it with at most {SeriesTermination.Show(wanted)} in all instead of {SeriesTermination.Show(source)} (driver and "
+                    + "series resistor), or shorten the branches that the wave divides at",
                 judged.Driven.Net, "", wanted)
             : new Fix(FixKind.Other, "no driver is strong enough: reduce the number of branches that the first wave divides at", judged.Driven.Net, "", double.NaN);
     }

@@ -72,7 +72,8 @@ public sealed record FlightTimeRule(RuleHeader Header, NetSet Nets, Window Allow
         var seconds = Allowed.Margin(span.Earliest) < Allowed.Margin(span.Latest) ? span.Earliest : span.Latest;
         var holds = Judgement.Holds(seconds, Allowed);
         var what = table.Basis == DelayBasis.FlightTime ? "flight time" : "time of flight";
-        var explanation = $"{net} has a {what} of {unit.Show(seconds)} from {delay.Driven.Driver} to {delay.Path.Receiver} over {DisplayUnit.Millimetres.Show(delay.Path.LengthMetres)} of trace; allowed is {LimitText}.";
+        var explanation = $"{net} has a {what} of {unit.Show(seconds)} from {delay.Driven.Driver} to {delay.Path.Receiver} over "
+            + $"{DisplayUnit.Millimetres.Show(delay.Path.LengthMetres)} of trace; allowed is {LimitText}.";
         judgement.Measured(
             subject, [net], seconds, Allowed, unit, table.MethodText(board, "the worse of both edges"), explanation,
             holds ? null : PathLength.Change(delay.Path, Allowed.Nearest(seconds) - seconds));

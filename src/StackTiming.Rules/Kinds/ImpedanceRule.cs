@@ -110,7 +110,8 @@ public sealed record ImpedanceRule(
         var unit = DisplayUnit.Ohms;
         var where = Where(worst.Segment, differential);
         var of = judged == 1 ? "its only trace" : $"the worst of its {judged} traces";
-        var explanation = $"{subject} has {(differential ? "a differential impedance" : "an impedance")} of {unit.Show(worst.Ohms)} {where}, {of}; allowed is {LimitText}.";
+        var explanation = $"{subject} has {(differential ? "a differential impedance" : "an impedance")} of {unit.Show(worst.Ohms)} "
+            + $"{where}, {of}; allowed is {LimitText}.";
         var fix = Judgement.Holds(worst.Ohms, Allowed) ? null : FixOf(board, subject, worst, differential);
         judgement.Measured(
             subject, nets, worst.Ohms, Allowed, unit, MethodText(worst.Line), explanation, fix);
@@ -128,7 +129,8 @@ public sealed record ImpedanceRule(
         var gap = segment.GapMetres > 0 ? $" at the same gap of {DisplayUnit.Millimetres.Show(segment.GapMetres)}" : "";
         return new Fix(
             FixKind.SetWidth,
-            $"route {subject} on {segment.Layer} {DisplayUnit.Millimetres.Show(width)} wide instead of {DisplayUnit.Millimetres.Show(segment.WidthMetres)}{gap} for {DisplayUnit.Ohms.Show(Target.Value)}",
+            $"route {subject} on {segment.Layer} {DisplayUnit.Millimetres.Show(width)} wide instead of "
+                + $"{DisplayUnit.Millimetres.Show(segment.WidthMetres)}{gap} for {DisplayUnit.Ohms.Show(Target.Value)}",
             subject, segment.Layer, width);
     }
 

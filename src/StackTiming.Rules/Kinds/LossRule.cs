@@ -84,7 +84,8 @@ public sealed record LossRule(RuleHeader Header, NetSet Nets, double AtHertz, do
                 (longest, longestSlope) = (piece, slope);
         }
         var unit = DisplayUnit.Decibels;
-        var explanation = $"{subject} loses {unit.Show(loss)} at {Gigahertz} over {DisplayUnit.Millimetres.Show(path.LengthMetres)} of trace; allowed is {unit.Show(MaxDecibels)}.";
+        var explanation = $"{subject} loses {unit.Show(loss)} at {Gigahertz} over {DisplayUnit.Millimetres.Show(path.LengthMetres)} of "
+            + $"trace; allowed is {unit.Show(MaxDecibels)}.";
         Fix? fix = null;
         if (loss > MaxDecibels)
         {
@@ -92,9 +93,11 @@ public sealed record LossRule(RuleHeader Header, NetSet Nets, double AtHertz, do
             fix = metres < longest.LengthMetres
                 ? new Fix(
                     FixKind.RemoveLength,
-                    $"shorten {longest.Net} by {DisplayUnit.Millimetres.Show(metres)} on {longest.Layer} ({unit.Show(loss - MaxDecibels)} at {unit.Show(longestSlope * 1e-3)}/mm), or route it wider",
+                    $"shorten {longest.Net} by {DisplayUnit.Millimetres.Show(metres)} on {longest.Layer} "
+                        + $"({unit.Show(loss - MaxDecibels)} at {unit.Show(longestSlope * 1e-3)}/mm), or route it wider",
                     longest.Net, longest.Layer, metres)
-                : new Fix(FixKind.Other, $"route {longest.Net} wider, on smoother copper or in a material of lower Df; shortening it cannot save {unit.Show(loss - MaxDecibels)}", longest.Net, longest.Layer, double.NaN);
+                : new Fix(FixKind.Other, $"route {longest.Net} wider, on smoother copper or in a material of lower Df; shortening it "
+                    + $"cannot save {unit.Show(loss - MaxDecibels)}", longest.Net, longest.Layer, double.NaN);
         }
         judgement.Measured(
             subject, nets, loss, Window.AtMost(MaxDecibels), unit, $"sum of trace attenuations; lines by {board.CalculatorName}", explanation, fix);

@@ -52,7 +52,8 @@ public sealed record MatchRule(RuleHeader Header, NetSet Nets, double WithinSeco
         foreach (var alone in table.Comparisons.Where(c => c.NetCount == 1).Select(c => c.Delays[0]))
         {
             if (matched.Add(alone.Driven.Net))
-                judgement.Unchecked(alone.Driven.Net, [alone.Driven.Net], $"no other net of '{Nets.Text}' reaches {alone.Path.Part}, so there is nothing to match it with");
+                judgement.Unchecked(alone.Driven.Net, [alone.Driven.Net], $"no other net of '{Nets.Text}' reaches {alone.Path.Part}, so "
+                    + "there is nothing to match it with");
         }
     }
 
@@ -83,8 +84,11 @@ public sealed record MatchRule(RuleHeader Header, NetSet Nets, double WithinSeco
             var holds = Judgement.Holds(value, Window.AtMost(WithinSeconds));
             var side = delay.Seconds < middle ? "early" : "late";
             var explanation = holds
-                ? $"{subject} arrives after {unit.Show(delay.Seconds)}; the net of the group farthest from it differs by {unit.Show(value)}, allowed is {unit.Show(WithinSeconds)}."
-                : $"{subject} arrives after {unit.Show(delay.Seconds)}, {unit.Show(Math.Abs(delay.Seconds - middle))} too {side} against the middle of the nets that match ({unit.Show(low)} to {unit.Show(high)}); the farthest of them differs by {unit.Show(value)}, allowed is {unit.Show(WithinSeconds)}.";
+                ? $"{subject} arrives after {unit.Show(delay.Seconds)}; the net of the group farthest from it differs by "
+                    + $"{unit.Show(value)}, allowed is {unit.Show(WithinSeconds)}."
+                : $"{subject} arrives after {unit.Show(delay.Seconds)}, {unit.Show(Math.Abs(delay.Seconds - middle))} too {side} against "
+                    + $"the middle of the nets that match ({unit.Show(low)} to {unit.Show(high)}); the farthest of them differs by "
+                    + $"{unit.Show(value)}, allowed is {unit.Show(WithinSeconds)}.";
             judgement.Measured(
                 subject, [net], value, Window.AtMost(WithinSeconds), unit, table.MethodText(board), explanation,
                 holds ? null : PathLength.Change(delay.Path, middle - delay.Seconds));

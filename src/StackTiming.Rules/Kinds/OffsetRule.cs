@@ -92,7 +92,8 @@ public sealed record OffsetRule(RuleHeader Header, NetSet Nets, ReferenceNets To
             var value = delay.Seconds - reference;
             var holds = Judgement.Holds(value, Allowed);
             var side = value < 0 ? "before" : "after";
-            var explanation = $"{subject} arrives after {unit.Show(delay.Seconds)}, {unit.Show(Math.Abs(value))} {side} {To.Name} ({unit.Show(reference)}); allowed is {Allowed.Show(unit)}.";
+            var explanation = $"{subject} arrives after {unit.Show(delay.Seconds)}, {unit.Show(Math.Abs(value))} {side} {To.Name} "
+                + $"({unit.Show(reference)}); allowed is {Allowed.Show(unit)}.";
             judgement.Measured(
                 subject, [net], value, Allowed, unit, table.MethodText(board), explanation,
                 holds ? null : PathLength.Change(delay.Path, Aim(value) - value));

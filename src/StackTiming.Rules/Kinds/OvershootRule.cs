@@ -97,7 +97,8 @@ public sealed record OvershootRule(
         var unit = DisplayUnit.Millivolts;
         var value = at.Response.OvershootVolts;
         var words = at.Edge == Edge.Rise ? "above its final level on the rising edge" : "below its final level on the falling edge";
-        var explanation = $"{judged.Subject} goes {unit.Show(value)} {words} ({DisplayUnit.Percent.Show(value / at.Response.SwingVolts)} of its swing of {unit.Show(at.Response.SwingVolts)}); allowed is {unit.Show(at.Limit)}.";
+        var explanation = $"{judged.Subject} goes {unit.Show(value)} {words} ({DisplayUnit.Percent.Show(value / at.Response.SwingVolts)} "
+            + $"of its swing of {unit.Show(at.Response.SwingVolts)}); allowed is {unit.Show(at.Limit)}.";
         var window = Window.AtMost(at.Limit);
         var fix = Judgement.Holds(value, window) ? null : SeriesTermination.Of(board, judged, judgement, (edge, r) => r.OvershootVolts <= Limit(edge, r));
         var finding = judgement.Measured(

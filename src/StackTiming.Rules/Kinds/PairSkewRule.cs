@@ -88,7 +88,8 @@ public sealed record PairSkewRule(
         var name = comparison.To.Length == 0 ? pair.Name : $"{pair.Name} at {comparison.To}";
         if (positive.Length != 1 || negative.Length != 1)
         {
-            judgement.Unchecked(name, both, $"it has {positive.Length} receivers on {pair.Positive} and {negative.Length} on {pair.Negative} there, so that it is not clear which belong together");
+            judgement.Unchecked(name, both, $"it has {positive.Length} receivers on {pair.Positive} and {negative.Length} on "
+                + $"{pair.Negative} there, so that it is not clear which belong together");
             return;
         }
         var p = positive[0];
@@ -112,7 +113,8 @@ public sealed record PairSkewRule(
         var window = Window.AtMost(max);
         var holds = Judgement.Holds(Math.Abs(skew), window);
         var (late, early, net) = skew > 0 ? (p, n, pair.Negative) : (n, p, pair.Positive);
-        var explanation = $"{name}: {late.Driven.Net} arrives {unit.Show(Math.Abs(skew))} after {early.Driven.Net} ({unit.Show(late.Seconds)} and {unit.Show(early.Seconds)}); allowed is {unit.Show(max)}.";
+        var explanation = $"{name}: {late.Driven.Net} arrives {unit.Show(Math.Abs(skew))} after {early.Driven.Net} "
+            + $"({unit.Show(late.Seconds)} and {unit.Show(early.Seconds)}); allowed is {unit.Show(max)}.";
         judgement.Measured(
             name, both, Math.Abs(skew), window, unit, table.MethodText(board), explanation,
             holds ? null : PathLength.Change(early.Path, Math.Abs(skew)));
@@ -136,7 +138,8 @@ public sealed record PairSkewRule(
         var unit = DisplayUnit.Picoseconds;
         var window = Window.AtMost(along);
         var place = DisplayUnit.Millimetres.Show(run.WorstAtMetres);
-        var explanation = $"{name}: the members are {unit.Show(run.WorstSkewSeconds)} apart after {place} of their common run of {DisplayUnit.Millimetres.Show(run.CoupledMetres)}; allowed is {unit.Show(along)}.";
+        var explanation = $"{name}: the members are {unit.Show(run.WorstSkewSeconds)} apart after {place} of their common run of "
+            + $"{DisplayUnit.Millimetres.Show(run.CoupledMetres)}; allowed is {unit.Show(along)}.";
         var fix = Judgement.Holds(run.WorstSkewSeconds, window) ? null : new Fix(
             FixKind.Other, $"take up the difference of {unit.Show(run.WorstSkewSeconds)} before the pair has run {place} side by side, near where it arises",
             both[0], "", double.NaN);

@@ -76,7 +76,9 @@ public sealed record RingbackRule(RuleHeader Header, NetSet Nets, double MarginV
         var edgeText = at.Edge == Edge.Rise ? "rising" : "falling";
         var explanation = at.Response.FirstLevelSeconds is null
             ? $"{judged.Subject} never reaches {name} on the {edgeText} edge: it ends {unit.Show(-worst)} short of it."
-            : $"{judged.Subject} comes back {(worst < 0 ? $"across {name} by {unit.Show(-worst)}" : $"to {unit.Show(worst)} beyond {name}")} on the {edgeText} edge; {unit.Show(MarginVolts)} must remain.";
+            : $"{judged.Subject} comes back "
+                + $"{(worst < 0 ? $"across {name} by {unit.Show(-worst)}" : $"to {unit.Show(worst)} beyond {name}")} on the {edgeText} "
+                + $"edge; {unit.Show(MarginVolts)} must remain.";
         var window = Window.AtLeast(MarginVolts);
         var fix = Judgement.Holds(worst, window) ? null : SeriesTermination.Of(board, judged, judgement, (edge, r) => Judgement.Holds(Beyond(edge, r, Threshold(edge, r)!.Value), window));
         var finding = judgement.Measured(

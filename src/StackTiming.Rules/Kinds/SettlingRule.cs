@@ -42,7 +42,8 @@ public sealed record SettlingRule(RuleHeader Header, NetSet Nets, double WithinS
         {
             var (edge, response) = judged.Responses.MaxBy(r => r.Response.SettledSeconds);
             var value = response.SettledSeconds;
-            var explanation = $"{judged.Subject} settles {unit.Show(value)} after the {(edge == Edge.Rise ? "rising" : "falling")} edge begins; it is sampled after {unit.Show(WithinSeconds)}.";
+            var explanation = $"{judged.Subject} settles {unit.Show(value)} after the {(edge == Edge.Rise ? "rising" : "falling")} edge "
+                + $"begins; it is sampled after {unit.Show(WithinSeconds)}.";
             var fix = Judgement.Holds(value, window) ? null : FixOf(board, judged, judgement, value);
             var finding = judgement.Measured(
                 judged.Subject, [judged.Driven.Net], value, window, unit, ResponseText.Method(board), explanation, fix);

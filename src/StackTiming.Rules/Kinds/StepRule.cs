@@ -110,12 +110,15 @@ public sealed record StepRule(RuleHeader Header, NetSet Nets, double Max, double
         if (board.WidthFor(shorter.Layer, shorter.GapMetres, target, differential) is not { } width)
         {
             return new Fix(
-                FixKind.Other, $"no width on {shorter.Layer} gives the {DisplayUnit.Ohms.Show(longer.Z0Ohms)} of the longer trace; move the shorter trace to another layer",
+                FixKind.Other, $"no width on {shorter.Layer} gives the {DisplayUnit.Ohms.Show(longer.Z0Ohms)} of the longer trace; move "
+                    + "the shorter trace to another layer",
                 net, shorter.Layer, double.NaN);
         }
         return new Fix(
             FixKind.SetWidth,
-            $"route {DisplayUnit.Millimetres.Show(shorter.LengthMetres)} on {shorter.Layer} {DisplayUnit.Millimetres.Show(width)} wide instead of {DisplayUnit.Millimetres.Show(shorter.WidthMetres)}, for the {DisplayUnit.Ohms.Show(longer.Z0Ohms)} of the rest",
+            $"route {DisplayUnit.Millimetres.Show(shorter.LengthMetres)} on {shorter.Layer} {DisplayUnit.Millimetres.Show(width)} wide "
+                + $"instead of {DisplayUnit.Millimetres.Show(shorter.WidthMetres)}, for the {DisplayUnit.Ohms.Show(longer.Z0Ohms)} of the "
+                + "rest",
             net, shorter.Layer, width);
     }
 

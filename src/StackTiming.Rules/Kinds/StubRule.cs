@@ -113,7 +113,8 @@ public sealed record StubRule(
         return metres <= worst.LengthMetres
             ? new Fix(
                 FixKind.RemoveLength,
-                $"shorten the branch to {worst.End} by {DisplayUnit.Millimetres.Show(metres)} on {worst.Layer} ({DisplayUnit.Picoseconds.Show(excess)} at {PathLength.Slope(worst.DelayPerMetre)}), or run the net through it",
+                $"shorten the branch to {worst.End} by {DisplayUnit.Millimetres.Show(metres)} on {worst.Layer} "
+                    + $"({DisplayUnit.Picoseconds.Show(excess)} at {PathLength.Slope(worst.DelayPerMetre)}), or run the net through it",
                 driven.Net, worst.Layer, metres)
             : new Fix(
                 FixKind.Other, $"run {driven.Net} through {worst.End} instead of branching off: even without its trace the branch is too long",

@@ -51,7 +51,8 @@ public sealed class RuleReader(MapReader map, RuleScope scope, NetResolver resol
         if (map.Text(key) is { } text && (text is not ("strobe" or "clock") || NetResolver.IsName(scope, text)))
             return resolver.Reference(scope, new SelectorItem(map.PositionOf(key), text), key);
         if (nets is { Strobe: null })
-            map.Problems.Error(map.PositionOf(key), $"'{key}' is missing, and '{Suggestion.Shorten(nets.Text)}' is no group with a strobe or clock", $"write {key}: MEM_DQS0");
+            map.Problems.Error(map.PositionOf(key), $"'{key}' is missing, and '{Suggestion.Shorten(nets.Text)}' is no group with a "
+                + "strobe or clock", $"write {key}: MEM_DQS0");
         return nets?.Strobe;
     }
 

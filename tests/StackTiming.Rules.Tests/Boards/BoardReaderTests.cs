@@ -153,6 +153,28 @@ public sealed class BoardReaderTests : IDisposable
     }
 
     [Fact]
+    public void A_folder_whose_name_begins_like_the_boards_is_outside_all_the_same()
+    {
+        folder.Write("b/board.yaml", "name: Sub\nstackup: ../b2/four.yaml\nlengths: ../nets.lengths.csv\nrules: ../board.rules.yaml\n");
+        File.Copy(Path.Combine(Path.GetDirectoryName(folder.BoardPath)!, "four.stackup.yaml"), Path.Combine(Directory.CreateDirectory(Path.Combine(Path.GetDirectoryName(folder.BoardPath)!, "b2")).FullName, "four.yaml"));
+        var problems = new ProblemList();
+        BoardReader.Read(Path.Combine(Path.GetDirectoryName(folder.BoardPath)!, "b", "board.yaml"), problems, TestContext.Current.CancellationToken);
+        Assert.Contains(problems.Items, p => p.Message == "'../b2/four.yaml' lies outside the board's folder");
+    }
+
+    [Theory]
+    [InlineData("")]
+    [InlineData("  ")]
+    [InlineData("a\0b")]
+    [InlineData("no/such/board.yaml")]
+    public void A_board_path_that_leads_nowhere_is_an_error(string path)
+    {
+        var problems = new ProblemList();
+        Assert.Null(BoardReader.Read(path, problems, TestContext.Current.CancellationToken));
+        Assert.True(problems.HasErrors);
+    }
+
+    [Fact]
     public void Foreign_headers_may_be_mapped_for_one_list()
     {
         folder.Write("foreign.csv", "Signal,Layer,Routed (mil),W (mil)\nX0,L1,1000,7\n")

@@ -125,6 +125,25 @@ public sealed class WaveformRulesTests : IDisposable
     }
 
     [Fact]
+    public void Behind_a_series_capacitor_levels_are_not_judged()
+    {
+        folder.Write("nets.lengths.csv", "net,from,to,layer,length[mm],width[mm]\nA,U1.1,C1.1,L1,10,0.18\nB,C1.2,U2.1,L1,30,0.18\n")
+            .Write("parts.yaml", """
+                models:
+                  out: { driver: { low: 0 V, high: 1.2 V, resistance: 50 ohm, rise: 150 ps } }
+                  in: { receiver: { capacitance: 0 pF, vil: 0.45 V, vih: 0.75 V, threshold: 0.6 V, termination: { resistance: 50 ohm, to: 0.6 V } } }
+                parts:
+                  U1: { pins: { 1: { model: out } } }
+                  U2: { pins: { 1: { model: in } } }
+                  C1: { joins: [ 1, 2 ], capacitance: 100 nF }
+                """)
+            .WriteBoard("rules: [ { id: R, kind: overshoot, nets: A, max: 100 mV } ]");
+        var finding = Assert.Single(BoardCheck.Run(folder.ReadWhole(), new CheckOptions(new RoundLines(), new DateOnly(2026, 12, 1))).Findings);
+        Assert.Equal(FindingStatus.Unchecked, finding.Status);
+        Assert.Contains("a series capacitor", finding.UncheckedReason, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void A_driver_that_never_reaches_the_threshold_has_no_flight_time()
     {
         folder.Write("nets.lengths.csv", "net,from,to,layer,length[mm],width[mm]\nA,U1.1,U2.1,L1,40,0.18\n")
