@@ -17,14 +17,15 @@ public sealed class BoardFiles(string boardPath, ProblemList problems)
     private readonly string home = Path.TrimEndingDirectorySeparator(Folder(Path.GetFullPath(boardPath))) + Path.DirectorySeparatorChar;
     private readonly Dictionary<string, InputFile?> loaded = new(StringComparer.Ordinal);
     private readonly Dictionary<string, DataMap?> parsed = new(StringComparer.Ordinal);
-    private readonly HashSet<string> reported = new(StringComparer.Ordinal);
+    private readonly HashSet<string> outsideFull = new(StringComparer.Ordinal);
+    private readonly List<string> outside = [];
     private readonly List<InputDigest> digests = [];
 
     /// <summary>The files read so far, in the order of reading.</summary>
     public ImmutableArray<InputDigest> Digests => [.. digests];
 
     /// <summary>
-    /// The path of a file as messages show it, from the path that another file gives. A file outside the board's folder is noted, once.
+    /// The path of a file as messages show it, from the path that another file gives. A file outside the board's folder is noted by <see cref="NoteOutside"/>.
     /// </summary>
     /// <param name="path">The path as written, relative to the file that names it.</param>
     /// <param name="from">Where it is written.</param>
@@ -38,9 +39,17 @@ public sealed class BoardFiles(string boardPath, ProblemList problems)
         }
         var shown = Path.IsPathRooted(path) ? path : Normal(Path.Combine(Folder(from.File), path));
         var full = Path.GetFullPath(shown);
-        if (!full.StartsWith(home, StringComparison.Ordinal) && reported.Add(full))
-            problems.Note(from, $"'{Suggestion.Shorten(path)}' lies outside the board's folder", "keep the file with the board when you archive it");
+        if (!full.StartsWith(home, StringComparison.Ordinal) && outsideFull.Add(full))
+            outside.Add(Suggestion.Shorten(shown));
         return shown;
+    }
+
+    /// <summary>Notes, in one line, which files lie outside the board's folder: whoever archives the board needs them too.</summary>
+    /// <param name="board">The board file.</param>
+    public void NoteOutside(FilePosition board)
+    {
+        if (outside.Count > 0)
+            problems.Note(board, $"outside the board's folder: {string.Join(", ", outside)}", "keep these with the board when you archive it");
     }
 
     /// <summary>Reads a file.</summary>

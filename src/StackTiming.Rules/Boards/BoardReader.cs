@@ -61,6 +61,7 @@ public sealed class BoardReader
         var coupons = ReadCoupons(reader);
         var assumed = SignalAssumptions.Read(reader);
         reader.Finish();
+        files.NoteOutside(from);
         cancellation.ThrowIfCancellationRequested();
 
         var index = lengths is null ? null : new NetIndex(lengths.Nets.Select(n => n.Name));
