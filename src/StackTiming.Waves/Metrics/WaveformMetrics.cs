@@ -112,7 +112,8 @@ public static class WaveformMetrics
                     continue;
                 if (i == volts.Length - 1)
                     return Math.Min(duration, i * step);
-                var next = Math.Abs(At(i + 1) - final);
+                // The next sample may lie on the other side of the final value.
+                var next = Math.Sign(At(i) - final) * (At(i + 1) - final);
                 return step * (i + ((off - band) / (off - next)));
             }
             return 0;
