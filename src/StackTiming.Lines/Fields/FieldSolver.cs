@@ -40,6 +40,9 @@ public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
         (new(1.7, 2.1, 4, 8, 14), 3e-7), (new(2, 2.2, 5, 10, 18), 1e-8), (new(2.2, 2.2, 7, 14, PanelIntegral.MaxTerms), 1e-8),
     ];
 
+    // The coarsest mesh alone, where there is no room for a second one; ten times what it is usually off by.
+    private const double UncheckedError = 1e-2;
+
     /// <summary>The solver with <see cref="FieldSolverOptions.Default"/>.</summary>
     public static FieldSolver Default { get; } = new(FieldSolverOptions.Default);
 
@@ -87,10 +90,18 @@ public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
         var pairs = new ConductorPairs(framed.Conductors, frame.Symmetric, tolerance);
         SolvedMesh? coarse = null;
         double[,] inductance = new double[0, 0], coarseInductance = inductance;
-        var error = double.PositiveInfinity;
+        var error = UncheckedError;
         foreach (var (level, floor) in Levels)
         {
-            var fine = new SolvedMesh(framed, surfaces, pairs, frame.Symmetric, level);
+            var mesh = PanelMesh.Of(surfaces, framed.BottomPlaneMetres, framed.TopPlaneMetres, frame.Symmetric, level);
+            if (mesh.Unknowns > options.MostUnknowns)
+            {
+                if (coarse is null)
+                    throw new SectionNotSolvableException(TooMany(mesh.Unknowns));
+                break;
+            }
+
+            var fine = new SolvedMesh(framed, surfaces, pairs, frame.Symmetric, mesh);
             inductance = Inductance(fine.EmptyCapacitance);
             if (coarse is not null)
             {
@@ -98,8 +109,9 @@ public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
                 error = double.IsNaN(error) ? error : Math.Max(error, floor);
             }
 
+            var isCompared = coarse is not null;
             (coarse, coarseInductance) = (fine, inductance);
-            if (error <= options.RelativeTolerance)
+            if (isCompared && error <= options.RelativeTolerance)
                 break;
         }
 
@@ -131,6 +143,11 @@ public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
             [.. section.Signals.Select(c => c.Name)], MethodId, mesh.FilledCapacitance, inductance, shares, error, warnings);
         return new FieldSolution(section, line, frame, surfaces, pairs, mesh);
     }
+
+    private string TooMany(int unknowns) => string.Create(
+        CultureInfo.InvariantCulture,
+        $"The cross-section needs {unknowns} unknowns on the coarsest mesh, more than the {options.MostUnknowns} allowed; ")
+        + "divide it into sections with fewer conductors.";
 
     private static double[,] Inductance(double[,] emptyCapacitance)
     {

@@ -13,12 +13,12 @@ internal sealed class SolvedMesh
     private readonly ConductorPairs pairs;
 
     /// <summary>Solves the surfaces of a section that is in the solver's frame.</summary>
-    public SolvedMesh(CrossSection section, SectionSurfaces surfaces, ConductorPairs pairs, bool symmetric, PanelDegrees degrees)
+    public SolvedMesh(CrossSection section, SectionSurfaces surfaces, ConductorPairs pairs, bool symmetric, PanelMesh mesh)
     {
         this.pairs = pairs;
         var openSpace = section.BottomPlaneMetres is null;
         Images = new PlaneImages(!openSpace, section.TopPlaneMetres);
-        Panels = PanelMesh.Of(surfaces, section.BottomPlaneMetres, section.TopPlaneMetres, symmetric, degrees).Panels;
+        Panels = mesh.Panels;
         using var influence = new InfluenceMatrix(Panels, Images, symmetric);
         Unknowns = influence.Unknowns;
         double[] permittivities = [.. surfaces.Regions.Media.Select(m => m.Dk)];

@@ -82,6 +82,40 @@ public sealed class DegenerateSectionTests
         Assert.All(line.EnergyShares, s => Assert.InRange(s.Share, 0, 1 + 1e-9));
     }
 
+    [Fact]
+    public void A_section_with_too_many_unknowns_is_refused()
+    {
+        var solver = new FieldSolver(FieldSolverOptions.Default with { MostUnknowns = 100 });
+        var error = Assert.Throws<SectionNotSolvableException>(() => solver.Solve(MicrostripBus(5, Mask(3.5, 25, 15))));
+        Assert.Contains("more than the 100 allowed", error.Message, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void A_result_that_could_not_be_refined_warns_of_its_error()
+    {
+        var section = MicrostripBus(1, Mask(3.5, 25, 15));
+        var unknowns = new FieldSolver(new FieldSolverOptions(1)).Solve(section).Unknowns;
+
+        var line = new FieldSolver(FieldSolverOptions.Default with { MostUnknowns = unknowns - 1 }).Solve(section).Line;
+
+        Assert.Equal(1e-2, line.RelativeError);
+        Assert.Contains("stopped at an estimated error of 1.00", Assert.Single(line.Warnings), StringComparison.Ordinal);
+        var converged = FieldSolver.Default.Solve(section).Line;
+        Assert.True(MatrixErrors.Largest(line.CapacitanceFaradPerMetre, converged.CapacitanceFaradPerMetre) < line.RelativeError);
+    }
+
+    [Fact]
+    public void Thirty_two_traces_are_solved()
+    {
+        var line = new FieldSolver(new FieldSolverOptions(1e-3)).Solve(MicrostripBus(32)).Line;
+        var eight = FieldSolver.Default.Solve(MicrostripBus(8)).Line;
+
+        Assert.Empty(line.Warnings);
+        // The middle of a wide bus looks the same from everywhere.
+        Assert.Equal(line.CapacitanceFaradPerMetre[15, 15], line.CapacitanceFaradPerMetre[10, 10], 1e-4 * line.CapacitanceFaradPerMetre[15, 15]);
+        Assert.Equal(eight.CapacitanceFaradPerMetre[3, 3], line.CapacitanceFaradPerMetre[15, 15], 2e-3 * line.CapacitanceFaradPerMetre[15, 15]);
+    }
+
     private static CrossSection Pair(double gap) => Section(
         [Slab("m", 4, 0, 100)], [Trace("a", 0, 100, 100, 35, 100), Trace("b", 100 + gap, 100, 100, 35, 100)]);
 }

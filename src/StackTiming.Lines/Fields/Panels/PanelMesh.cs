@@ -35,6 +35,9 @@ internal sealed class PanelMesh
     /// <summary>The panels, those on conductors first.</summary>
     public Panel[] Panels { get; }
 
+    /// <summary>Number of polynomials on all panels.</summary>
+    public int Unknowns => Panels.Sum(p => p.Terms);
+
     /// <summary>Divides the surfaces of a section in the solver's frame.</summary>
     public static PanelMesh Of(SectionSurfaces surfaces, double? bottomPlane, double? topPlane, bool half, PanelDegrees degrees) =>
         new(surfaces, topPlane, bottomPlane is not null, half, degrees);

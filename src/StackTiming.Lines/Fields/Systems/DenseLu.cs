@@ -159,32 +159,33 @@ internal sealed class DenseLu
         ref var c2 = ref Unsafe.Add(ref c1, stride);
         ref var c3 = ref Unsafe.Add(ref c2, stride);
         var at = (nuint)row;
-        var (s00, s01) = (Vector512.LoadUnsafe(ref c0, at), Vector512.LoadUnsafe(ref c0, at + 8));
-        var (s10, s11) = (Vector512.LoadUnsafe(ref c1, at), Vector512.LoadUnsafe(ref c1, at + 8));
-        var (s20, s21) = (Vector512.LoadUnsafe(ref c2, at), Vector512.LoadUnsafe(ref c2, at + 8));
-        var (s30, s31) = (Vector512.LoadUnsafe(ref c3, at), Vector512.LoadUnsafe(ref c3, at + 8));
+        var (s00, s01, s10, s11) = (Vector512<double>.Zero, Vector512<double>.Zero, Vector512<double>.Zero, Vector512<double>.Zero);
+        var (s20, s21, s30, s31) = (Vector512<double>.Zero, Vector512<double>.Zero, Vector512<double>.Zero, Vector512<double>.Zero);
         var lower = (nuint)start * step + at;
         for (var j = start; j < end; j++, lower += step)
         {
             var (l0, l1) = (Vector512.LoadUnsafe(ref origin, lower), Vector512.LoadUnsafe(ref origin, lower + 8));
-            var u = Vector512.Create(-Unsafe.Add(ref c0, j));
+            var u = Vector512.Create(Unsafe.Add(ref c0, j));
             (s00, s01) = (Vector512.FusedMultiplyAdd(l0, u, s00), Vector512.FusedMultiplyAdd(l1, u, s01));
-            u = Vector512.Create(-Unsafe.Add(ref c1, j));
+            u = Vector512.Create(Unsafe.Add(ref c1, j));
             (s10, s11) = (Vector512.FusedMultiplyAdd(l0, u, s10), Vector512.FusedMultiplyAdd(l1, u, s11));
-            u = Vector512.Create(-Unsafe.Add(ref c2, j));
+            u = Vector512.Create(Unsafe.Add(ref c2, j));
             (s20, s21) = (Vector512.FusedMultiplyAdd(l0, u, s20), Vector512.FusedMultiplyAdd(l1, u, s21));
-            u = Vector512.Create(-Unsafe.Add(ref c3, j));
+            u = Vector512.Create(Unsafe.Add(ref c3, j));
             (s30, s31) = (Vector512.FusedMultiplyAdd(l0, u, s30), Vector512.FusedMultiplyAdd(l1, u, s31));
         }
 
-        s00.StoreUnsafe(ref c0, at);
-        s01.StoreUnsafe(ref c0, at + 8);
-        s10.StoreUnsafe(ref c1, at);
-        s11.StoreUnsafe(ref c1, at + 8);
-        s20.StoreUnsafe(ref c2, at);
-        s21.StoreUnsafe(ref c2, at + 8);
-        s30.StoreUnsafe(ref c3, at);
-        s31.StoreUnsafe(ref c3, at + 8);
+        Store(ref c0, at, s00, s01);
+        Store(ref c1, at, s10, s11);
+        Store(ref c2, at, s20, s21);
+        Store(ref c3, at, s30, s31);
+    }
+
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static void Store(ref double column, nuint at, Vector512<double> first, Vector512<double> second)
+    {
+        (Vector512.LoadUnsafe(ref column, at) - first).StoreUnsafe(ref column, at);
+        (Vector512.LoadUnsafe(ref column, at + 8) - second).StoreUnsafe(ref column, at + 8);
     }
 
     private void UpdateLanes(ref double origin, int start, int end, int row, int k)
