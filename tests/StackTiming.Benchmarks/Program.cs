@@ -7,4 +7,11 @@ if (args is ["generate", var folder, var nets])
     Console.WriteLine(GeneratedBoard.Write(folder, int.Parse(nets, CultureInfo.InvariantCulture)));
     return;
 }
+
+// "field-solver" prints the table of the solver's errors and times.
+if (args is ["field-solver"])
+{
+    FieldSolverTable.Write(Console.Out);
+    return;
+}
 BenchmarkDotNet.Running.BenchmarkSwitcher.FromAssembly(typeof(GeneratedBoard).Assembly).Run(args);

@@ -44,25 +44,38 @@ internal sealed class BoundarySystem : IDisposable
     public int Unknowns { get; }
 
     /// <summary>
-    /// Charge coefficients for the given potentials of the conductors, in volts by index; in open space followed by the potential of the
-    /// conductors over that of the charges alone.
+    /// Charge coefficients for one volt on each of the conductors in turn; in open space followed by the potential of the conductors over
+    /// that of the charges alone.
     /// </summary>
-    public double[] Solve(ReadOnlySpan<double> potentials)
+    public double[][] Solve(ReadOnlySpan<int> conductors)
     {
-        var x = new double[size];
-        for (var i = 0; i < influence.ConductorPanels; i++)
-            x.AsSpan(influence.FirstUnknown[i], influence.Panels[i].Terms).Fill(potentials[influence.Panels[i].Piece.Conductor]);
-        lu.Solve(x);
-        return x;
+        var rights = new double[conductors.Length][];
+        for (var r = 0; r < rights.Length; r++)
+        {
+            rights[r] = new double[size];
+            for (var i = 0; i < influence.ConductorPanels; i++)
+            {
+                if (influence.Panels[i].Piece.Conductor == conductors[r])
+                    rights[r].AsSpan(influence.FirstUnknown[i], influence.Panels[i].Terms).Fill(1);
+            }
+        }
+
+        lu.Solve(rights);
+        return rights;
     }
 
-    /// <summary>The adjoint: λ with Aᵀλ = weights.</summary>
-    public double[] SolveAdjoint(ReadOnlySpan<double> weights)
+    /// <summary>The adjoint: λ with Aᵀλ = weights, for each of the weights.</summary>
+    public double[][] SolveAdjoint(double[][] weights)
     {
-        var x = new double[size];
-        weights.CopyTo(x);
-        lu.SolveTransposed(x);
-        return x;
+        var rights = new double[weights.Length][];
+        for (var r = 0; r < rights.Length; r++)
+        {
+            rights[r] = new double[size];
+            weights[r].CopyTo(rights[r], 0);
+        }
+
+        lu.SolveTransposed(rights);
+        return rights;
     }
 
     /// <summary>
@@ -126,12 +139,20 @@ internal sealed class BoundarySystem : IDisposable
         }
     }
 
-    /// <summary>The normal field of charges (units of charge per metre) at the field nodes.</summary>
-    public double[] Fields(ReadOnlySpan<double> coefficients)
+    /// <summary>The normal field of each set of charges (units of charge per metre) at the field nodes.</summary>
+    public double[][] Fields(double[][] charges)
     {
-        var fields = new double[influence.FieldCount];
+        var fields = new double[charges.Length][];
+        for (var i = 0; i < fields.Length; i++)
+            fields[i] = new double[influence.FieldCount];
+        var column = new double[influence.FieldCount];
         for (var j = 0; j < Unknowns; j++)
-            influence.AddFields(j, parity, coefficients[j], fields);
+        {
+            influence.CopyFields(j, parity, column);
+            for (var i = 0; i < fields.Length; i++)
+                LaneSpans.AddScaled(fields[i], column, charges[i][j]);
+        }
+
         return fields;
     }
 

@@ -43,29 +43,55 @@ internal sealed class DenseLu
     /// <summary>True where a pivot is zero or not a number, so that there is no solution.</summary>
     public bool IsSingular { get; private set; }
 
-    /// <summary>Solves A x = b in place.</summary>
-    public void Solve(Span<double> b)
+    /// <summary>Solves A x = b in place for each of the right sides; together, so that the factors are read once.</summary>
+    public void Solve(double[][] rights)
     {
-        for (var i = 0; i < size; i++)
-            (b[i], b[pivots[i]]) = (b[pivots[i]], b[i]);
+        foreach (var b in rights)
+        {
+            for (var i = 0; i < size; i++)
+                (b[i], b[pivots[i]]) = (b[pivots[i]], b[i]);
+        }
+
         for (var j = 0; j < size; j++)
-            LaneSpans.AddScaled(b[(j + 1)..size], Column(j)[(j + 1)..size], -b[j]);
+        {
+            var below = Column(j)[(j + 1)..size];
+            foreach (var b in rights)
+                LaneSpans.AddScaled(b.AsSpan((j + 1)..size), below, -b[j]);
+        }
+
         for (var j = size - 1; j >= 0; j--)
         {
-            b[j] /= lu[j * stride + j];
-            LaneSpans.AddScaled(b[..j], Column(j)[..j], -b[j]);
+            var above = Column(j)[..j];
+            foreach (var b in rights)
+            {
+                b[j] /= lu[j * stride + j];
+                LaneSpans.AddScaled(b.AsSpan(..j), above, -b[j]);
+            }
         }
     }
 
-    /// <summary>Solves Aᵀ x = b in place.</summary>
-    public void SolveTransposed(Span<double> b)
+    /// <summary>Solves Aᵀ x = b in place for each of the right sides.</summary>
+    public void SolveTransposed(double[][] rights)
     {
         for (var j = 0; j < size; j++)
-            b[j] = (b[j] - LaneSpans.Dot(Column(j)[..j], b[..j])) / lu[j * stride + j];
+        {
+            var above = Column(j)[..j];
+            foreach (var b in rights)
+                b[j] = (b[j] - LaneSpans.Dot(above, b.AsSpan(..j))) / lu[j * stride + j];
+        }
+
         for (var j = size - 1; j >= 0; j--)
-            b[j] -= LaneSpans.Dot(Column(j)[(j + 1)..size], b[(j + 1)..size]);
-        for (var i = size - 1; i >= 0; i--)
-            (b[i], b[pivots[i]]) = (b[pivots[i]], b[i]);
+        {
+            var below = Column(j)[(j + 1)..size];
+            foreach (var b in rights)
+                b[j] -= LaneSpans.Dot(below, b.AsSpan((j + 1)..size));
+        }
+
+        foreach (var b in rights)
+        {
+            for (var i = size - 1; i >= 0; i--)
+                (b[i], b[pivots[i]]) = (b[pivots[i]], b[i]);
+        }
     }
 
     private Span<double> Column(int j) => lu.AsSpan(j * stride, stride);

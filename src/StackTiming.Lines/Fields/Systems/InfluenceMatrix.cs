@@ -79,14 +79,6 @@ internal sealed class InfluenceMatrix : IDisposable
     /// <summary>Copies the normal fields at the first field nodes likewise.</summary>
     public void CopyFields(int unknown, int parity, Span<double> target) => Copy(unknown, parity, fieldRows, target);
 
-    /// <summary>Adds the normal fields at the field nodes of a coefficient of the given size.</summary>
-    public void AddFields(int unknown, int parity, double coefficient, Span<double> target)
-    {
-        LaneSpans.AddScaled(target, direct.AsSpan(unknown * stride + fieldRows, target.Length), coefficient);
-        if (parity != 0)
-            LaneSpans.AddScaled(target, mirror.AsSpan(unknown * stride + fieldRows, target.Length), parity * coefficient);
-    }
-
     /// <summary>Gives the store back; the matrix must not be used any more.</summary>
     public void Dispose()
     {

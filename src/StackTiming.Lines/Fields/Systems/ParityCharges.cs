@@ -22,30 +22,18 @@ internal sealed class ParityCharges
         (Parity, this.pairs) = (parity, pairs);
         drives = pairs.Drives(parity);
         using var system = new BoundarySystem(influence, permittivities, parity, openSpace);
-        solutions = new double[drives.Length][];
-        var fields = new double[drives.Length][];
-        for (var i = 0; i < drives.Length; i++)
+        solutions = system.Solve(drives);
+        double[][] weights = [.. pairs.RightSignals.Select(system.FreeCharge)];
+        freeCharges = new double[weights.Length, drives.Length];
+        slopes = new double[weights.Length, drives.Length][];
+        for (var row = 0; row < weights.Length; row++)
         {
-            var potentials = new double[pairs.Conductors];
-            potentials[drives[i]] = 1;
-            solutions[i] = system.Solve(potentials);
-            fields[i] = permittivities.Length > 0 ? system.Fields(solutions[i]) : [];
+            for (var i = 0; i < drives.Length; i++)
+                freeCharges[row, i] = LaneSpans.Dot(weights[row], solutions[i]);
         }
 
-        freeCharges = new double[pairs.RightSignals.Length, drives.Length];
-        slopes = new double[pairs.RightSignals.Length, drives.Length][];
-        foreach (var (row, signal) in pairs.RightSignals.Index())
-        {
-            var weights = system.FreeCharge(signal);
-            var adjoint = permittivities.Length > 0 ? system.SolveAdjoint(weights) : [];
-            for (var i = 0; i < drives.Length; i++)
-            {
-                freeCharges[row, i] = LaneSpans.Dot(weights, solutions[i]);
-                slopes[row, i] = new double[permittivities.Length];
-                if (permittivities.Length > 0)
-                    system.AddFreeChargeSlopes(signal, adjoint, solutions[i], fields[i], slopes[row, i]);
-            }
-        }
+        if (permittivities.Length > 0)
+            FindSlopes(system, weights, permittivities.Length);
     }
 
     /// <summary>+1 even, -1 odd, 0 no symmetry.</summary>
@@ -64,6 +52,19 @@ internal sealed class ParityCharges
         for (var i = 0; i < drives.Length; i++)
             LaneSpans.AddScaled(sum, solutions[i], Part(volts, drives[i]));
         return sum;
+    }
+
+    private void FindSlopes(BoundarySystem system, double[][] weights, int media)
+    {
+        var (fields, adjoints) = (system.Fields(solutions), system.SolveAdjoint(weights));
+        for (var row = 0; row < weights.Length; row++)
+        {
+            for (var i = 0; i < drives.Length; i++)
+            {
+                slopes[row, i] = new double[media];
+                system.AddFreeChargeSlopes(pairs.RightSignals[row], adjoints[row], solutions[i], fields[i], slopes[row, i]);
+            }
+        }
     }
 
     private double Part(ReadOnlySpan<double> volts, int conductor)

@@ -28,11 +28,13 @@ public sealed class DenseLuTests
 
         var lu = new DenseLu(columns, size, stride);
         var (x, y) = (right.ToArray(), right.ToArray());
-        lu.Solve(x);
-        lu.SolveTransposed(y);
+        double[] twice = [.. x.Select(v => 2 * v)];
+        lu.Solve([x, twice]);
+        lu.SolveTransposed([y]);
 
         var scale = matrix.Inverse().InfinityNorm();
         Assert.False(lu.IsSingular);
+        Assert.Equal(x.Select(v => 2 * v), twice);
         Assert.True((Vector<double>.Build.Dense(x) - matrix.Solve(right)).InfinityNorm() < 1e-12 * size * scale);
         Assert.True((Vector<double>.Build.Dense(y) - matrix.Transpose().Solve(right)).InfinityNorm() < 1e-12 * size * scale);
     }
