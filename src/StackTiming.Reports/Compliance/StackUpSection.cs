@@ -101,6 +101,17 @@ internal static class StackUpSection
             ],
             [.. result.Lines.Take(LinesShown).Select(LineRow)],
             result.Lines.Length > LinesShown ? $"… and {result.Lines.Length - LinesShown} more, see the attached results" : "Z0 of a pair is that of one trace with the other quiet; ε eff and delay of a pair are those of its odd mode."));
+        if (result.Lines.Any(l => l.CrossCheck is not null))
+        {
+            blocks.Add(new Table(
+                [
+                    new Column("Layer"), new Column("Width, mm", Alignment.Right), new Column("Gap, mm", Alignment.Right), new Column("Judged by"), new Column("Z, Ω", Alignment.Right),
+                    new Column("Compared with", Grows: true), new Column("Z, Ω", Alignment.Right), new Column("Difference", Alignment.Right), new Column("Explained", Alignment.Right),
+                    new Column("Comparison"),
+                ],
+                [.. result.Lines.Where(l => l.CrossCheck is not null).Take(LinesShown).Select(CrossCheckRow)],
+                "Each section by a second method. The difference is part of the uncertainty of the impedance; explained is what the two methods say of their own errors."));
+        }
         var warnings = result.Lines.SelectMany(l => l.Warnings.Select(w => (w, l))).GroupBy(p => p.w).Take(20)
             .Select(g => (RichText)$"{string.Join(", ", g.Select(p => $"{p.l.Layer} {Wording.Millimetres(p.l.WidthMetres)} mm").Distinct().Take(6))}: {g.Key}.").ToImmutableArray();
         if (!warnings.IsEmpty)
@@ -119,5 +130,15 @@ internal static class StackUpSection
             F(line.EpsEff, "0.000"), F(line.DelaySecondsPerMetre * 1e9, "0.000"),
             string.Join(", ", line.Shares.OrderByDescending(s => s.Share).Take(3).Select(s => $"{s.Dielectric} {Wording.Percent(s.Share, 0)}")),
             line.MethodId, Wording.Percent(line.RelativeError, 1), F(line.TotalLengthMetres * 1e3, "0"));
+    }
+
+    private static Row CrossCheckRow(LineUse line)
+    {
+        var check = line.CrossCheck!;
+        return Row.Of(
+            RichText.In(line.Layer, Emphasis.Strong), Wording.Millimetres(line.WidthMetres), line.GapMetres is { } gap ? Wording.Millimetres(gap) : "", line.MethodId,
+            (line.ZDiffOhms ?? line.Z0Ohms).ToString("0.00", CultureInfo.InvariantCulture), check.MethodId, check.Ohms.ToString("0.00", CultureInfo.InvariantCulture),
+            (100 * check.Difference).ToString("+0.00;−0.00", CultureInfo.InvariantCulture) + " %", Wording.Percent(check.Allowed, 2),
+            check.OutsideValidity ? "outside its range" : check.Disagrees ? "differs by more" : "agrees");
     }
 }

@@ -247,6 +247,17 @@ public static class ResultsJson
             Number(json, "relative_error", line.RelativeError);
             json.WriteNumber("segments", line.SegmentCount);
             Number(json, "total_length_m", line.TotalLengthMetres);
+            if (line.CrossCheck is { } check)
+            {
+                json.WriteStartObject("cross_check");
+                json.WriteString("method", check.MethodId);
+                Number(json, "impedance_ohm", check.Ohms);
+                Number(json, "difference", check.Difference);
+                Number(json, "allowed", check.Allowed);
+                json.WriteBoolean("disagrees", check.Disagrees);
+                json.WriteBoolean("outside_validity", check.OutsideValidity);
+                json.WriteEndObject();
+            }
             WriteTexts(json, "warnings", line.Warnings);
             json.WriteEndObject();
         }

@@ -27,7 +27,7 @@ public static class BoardCheck
         TracePaths(physics, needs, clock);
         SolveWaves(physics, needs, clock);
         var judgements = Judge(board, physics, clock);
-        var lineUses = CheckTables.Lines(board, lines);
+        var lineUses = CheckTables.Lines(board, lines, options.SecondOpinion);
 
         var findings = WaiverBook.Apply(
             [.. judgements.SelectMany(j => j.Findings)], board.Waivers, board.Rules.Select(r => r.Header.Id).ToHashSet(StringComparer.Ordinal), options.Today);

@@ -8,6 +8,9 @@ namespace StackTiming.Rules.Checking;
 /// <param name="Today">The day of the check, against which waivers are held.</param>
 public sealed record CheckOptions(ILineCalculator Calculator, DateOnly Today)
 {
+    /// <summary>A second method that each section of the board is compared with, or null.</summary>
+    public ILineCalculator? SecondOpinion { get; init; }
+
     /// <summary>How many waveforms are kept for figures, the worst ones.</summary>
     public int MostWaves { get; init; } = 24;
 

@@ -1,7 +1,10 @@
 using System.Collections.Immutable;
+using StackTiming.Lines.Sections;
+using StackTiming.Lines.Solutions;
 using StackTiming.Nets.Lengths;
 using StackTiming.Rules.Boards;
 using StackTiming.Rules.Results;
+using StackTiming.Stackups.Reading;
 using StackTiming.Waves.Paths;
 
 namespace StackTiming.Rules.Checking;
@@ -10,7 +13,7 @@ namespace StackTiming.Rules.Checking;
 internal static class CheckTables
 {
     /// <summary>The distinct lines of a board with how much of it uses them.</summary>
-    public static ImmutableArray<LineUse> Lines(Board board, LineTable lines)
+    public static ImmutableArray<LineUse> Lines(Board board, LineTable lines, ILineCalculator? secondOpinion)
     {
         var uses = new Dictionary<LineKey, (int Count, double Metres)>();
         foreach (ref readonly var segment in board.Lengths.Segments)
@@ -21,7 +24,21 @@ internal static class CheckTables
             var use = uses.GetValueOrDefault(key);
             uses[key] = (use.Count + 1, use.Metres + segment.LengthMetres);
         }
-        return [.. lines.Lines.Select(l => Row(l, uses.GetValueOrDefault(l.Key)))];
+        return [.. lines.Lines.Select(l => Row(l, uses.GetValueOrDefault(l.Key)) with { CrossCheck = secondOpinion is null ? null : Compare(board, l, secondOpinion) })];
+    }
+
+    private static CrossCheck? Compare(Board board, BoardLine line, ILineCalculator secondOpinion)
+    {
+        var request = new SectionRequest(default, line.Key.Layer, line.Key.WidthMetres)
+        {
+            PairGapMetres = line.Key.GapMetres > 0 ? line.Key.GapMetres : null,
+            FrequencyHertz = board.Assumed.FrequencyHertz,
+        };
+        if (SectionBuilder.Build(board.StackUp, request, new ProblemList()) is not { } section || secondOpinion.Calculate(section) is not { } second)
+            return null;
+        var ohms = line.Pair is null ? second.Z0Ohms : PairModes.Of(second).ZDiffOhms;
+        var first = line.Pair?.ZDiffOhms ?? line.Solution.Z0Ohms;
+        return new CrossCheck(second.MethodId, ohms, (ohms / first) - 1, second.RelativeError + line.Solution.RelativeError, !second.Warnings.IsEmpty);
     }
 
     private static LineUse Row(BoardLine line, (int Count, double Metres) use)

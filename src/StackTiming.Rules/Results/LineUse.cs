@@ -30,4 +30,20 @@ public sealed record LineUse(
     double RelativeError,
     ImmutableArray<string> Warnings,
     int SegmentCount,
-    double TotalLengthMetres);
+    double TotalLengthMetres)
+{
+    /// <summary>What a second method says of the same section, or null where none was asked or none describes it.</summary>
+    public CrossCheck? CrossCheck { get; init; }
+}
+
+/// <summary>A second method's impedance of a section.</summary>
+/// <param name="MethodId">The second method.</param>
+/// <param name="Ohms">Its impedance, ohm: differential for a pair.</param>
+/// <param name="Difference">Its impedance against that of the first, relative: part of the uncertainty of both.</param>
+/// <param name="Allowed">Sum of what both methods say of their errors, relative.</param>
+/// <param name="OutsideValidity">True where the second method is used outside its validity range.</param>
+public sealed record CrossCheck(string MethodId, double Ohms, double Difference, double Allowed, bool OutsideValidity)
+{
+    /// <summary>True where the two differ by more than their errors explain.</summary>
+    public bool Disagrees => Math.Abs(Difference) > Allowed;
+}

@@ -30,7 +30,7 @@ internal static class CheckCommand
         var paper = new Option<string>("--paper") { Description = "Paper of the report: a4 or letter.", DefaultValueFactory = _ => "a4", HelpName = "paper" };
         paper.AcceptOnlyFromAmong("a4", "letter");
         var date = new Option<string?>("--date") { Description = "Day of the check, against which waivers are held (default: today).", HelpName = "yyyy-mm-dd" };
-        var method = MethodOption.Create(MethodOption.ClosedForm, withBoth: false);
+        var method = MethodOption.Create(MethodOption.Field, withBoth: false);
         var command = new Command("check", "Check a board against its rules: verdict, findings and compliance report.")
         {
             board, report, json, csv, junit, paper, date, method,
@@ -64,6 +64,7 @@ internal static class CheckCommand
         var read = new PhaseTime("read", clock.Elapsed, $"{board.Inputs.Length} files");
         var result = CheckProgressBar.Run(progress => BoardCheck.Run(board, new CheckOptions(MethodOption.Calculator(method), today)
         {
+            SecondOpinion = MethodOption.SecondOpinion(method),
             Progress = progress,
             Cancellation = cancellation,
             Before = [read],

@@ -36,7 +36,7 @@ internal static class LinesCommand
         var frequency = new Option<string>("--frequency") { Description = "Frequency of Dk, Df and losses.", DefaultValueFactory = _ => "1 GHz", HelpName = "frequency" };
         var csv = new Option<string?>("--csv") { Description = "Write the table as CSV.", HelpName = "file.csv" };
         var json = new Option<bool>("--json") { Description = "Print JSON instead of a table." };
-        var method = MethodOption.Create(MethodOption.ClosedForm, withBoth: false);
+        var method = MethodOption.Create(MethodOption.Field, withBoth: false);
         var command = new Command("lines", "Impedance, delay, loss and permittivity of traces on each layer, and the width for a target impedance.")
         {
             stackUp, width, gap, target, layer, frequency, csv, json, method,

@@ -24,7 +24,7 @@ internal static class NetCommand
         var json = new Option<bool>("--json") { Description = "Print JSON instead of a table." };
         var waveforms = new Option<bool>("--waveforms") { Description = "With --json: print the waveforms as well." };
         var figure = new Option<string?>("--figure") { Description = "Draw the waveforms.", HelpName = "file.svg|png" };
-        var method = MethodOption.Create(MethodOption.ClosedForm, withBoth: false);
+        var method = MethodOption.Create(MethodOption.Field, withBoth: false);
         var command = new Command("net", "Waveforms of a net: first crossing, flight time, overshoot, ringback and settling at each receiver.")
         {
             file, net, driver, falling, json, waveforms, figure, method,

@@ -27,7 +27,23 @@ internal static class MethodOption
         return option;
     }
 
-    /// <summary>The calculator of a choice.</summary>
+    /// <summary>The calculator of a choice; what the solver has solved is remembered in the user's cache folder.</summary>
     /// <param name="choice">The choice; not both.</param>
-    public static ILineCalculator Calculator(string choice) => choice == Field ? FieldSolver.Default : ClosedForms.Calculator;
+    public static ILineCalculator Calculator(string choice) =>
+        choice == Field ? new SolutionCache(FieldSolver.Default, CacheFolder(), $"{FieldSolver.MethodId} {ToolVersion.Identity.Version} {FieldSolverOptions.Default.RelativeTolerance:R}") : ClosedForms.Calculator;
+
+    /// <summary>What a choice is compared with: the solver with the closed forms. A closed form alone is the fast way, without comparison.</summary>
+    /// <param name="choice">The choice; not both.</param>
+    public static ILineCalculator? SecondOpinion(string choice) => choice == Field ? ClosedForms.Calculator : null;
+
+    // STACKTIMING_CACHE, else the cache folder of the operating system's user.
+    private static string CacheFolder()
+    {
+        if (Environment.GetEnvironmentVariable("STACKTIMING_CACHE") is { Length: > 0 } stated)
+            return stated;
+        var cache = Environment.GetEnvironmentVariable("XDG_CACHE_HOME") is { Length: > 0 } xdg && Path.IsPathRooted(xdg) ? xdg
+            : OperatingSystem.IsWindows() ? Environment.GetFolderPath(Environment.SpecialFolder.LocalApplicationData)
+            : Path.Combine(Environment.GetFolderPath(Environment.SpecialFolder.UserProfile), ".cache");
+        return Path.Combine(cache, "stacktiming", "lines");
+    }
 }
