@@ -24,9 +24,15 @@ public static class DefaultUnitsReader
             if (map.Text(key) is not { } name)
                 continue;
             if (Unit.TryParse(name, out var unit) && unit.Dimension == dimension)
+            {
                 factors[dimension] = unit.Factor;
-            else
-                file.Problems.Error(map.PositionOf(key), $"'{Suggestion.Shorten(name)}' is not a unit of {key}", "it can be " + string.Join(", ", DimensionWords.Units(dimension)));
+                continue;
+            }
+            file.Problems.Error(map.PositionOf(key), $"'{Suggestion.Shorten(name)}' is not a unit of {key}",
+                UnitSpelling.WithOtherCapitals(name, dimension) is { } meant ? $"did you mean '{meant}'?" : "it can be " + string.Join(", ", DimensionWords.Units(dimension)));
+            // Nothing comes of this file; the usual unit keeps its bare numbers from being reported one by one.
+            if (Unit.TryParse(DimensionWords.Units(dimension)[0], out var usual))
+                factors[dimension] = usual.Factor;
         }
         map.Finish();
         return new DefaultUnits(factors.ToImmutable());

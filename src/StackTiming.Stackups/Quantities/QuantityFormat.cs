@@ -15,7 +15,10 @@ public static class QuantityFormat
     public static string Engineering(double value, string unit, int digits = 4)
     {
         var magnitude = Math.Abs(value);
-        if (magnitude == 0 || !double.IsFinite(value))
+        // The sign of a negative zero says nothing.
+        if (magnitude == 0)
+            return $"0 {unit}";
+        if (!double.IsFinite(value))
             return $"{value.ToString(CultureInfo.InvariantCulture)} {unit}";
         var (factor, prefix) = Prefixes[^1];
         foreach (var candidate in Prefixes)
@@ -34,7 +37,9 @@ public static class QuantityFormat
     /// <param name="digits">Significant digits.</param>
     public static string Number(double value, int digits)
     {
-        if (value == 0 || !double.IsFinite(value))
+        if (value == 0)
+            return "0";
+        if (!double.IsFinite(value))
             return value.ToString(CultureInfo.InvariantCulture);
         var rounded = Significant(value, digits);
         var decimals = digits - 1 - (int)Math.Floor(Math.Log10(Math.Abs(rounded)));

@@ -4,7 +4,8 @@ namespace StackTiming.Stackups.Quantities;
 
 /// <summary>
 /// Turns the text of a quantity into SI units: a number, a unit, and a tolerance. <c>75 um</c>, <c>75 um ±10 %</c>,
-/// <c>75 um +/- 8 um</c>, <c>75 um +8/-5 um</c>, <c>3.9 ±3 % uniform</c>. A tolerance without unit has the unit of the value.
+/// <c>75 um +/- 8 um</c>, <c>75 um +8/-5 um</c>, <c>3.9 ±3 % uniform</c>. A tolerance without unit has the unit of the value; one in
+/// percent is a share of the value, also where the value itself is a percentage.
 /// </summary>
 public static class QuantityParser
 {
@@ -22,10 +23,36 @@ public static class QuantityParser
     {
         quantity = default;
         var parse = new Parse(dimension, defaults);
-        var ok = parse.Run(text.Trim(), out quantity);
+        var ok = parse.Run(Typed(text), out quantity);
         problem = parse.Problem;
         advice = parse.Advice;
         return ok;
+    }
+
+    /// <summary>Reads a tolerance that stands alone: <c>20 um</c>, <c>±20 um</c>, <c>+10/-20 um</c>, <c>20 um limits</c>.</summary>
+    /// <param name="text">The text.</param>
+    /// <param name="dimension">What it must measure.</param>
+    /// <param name="defaults">Units for bare numbers.</param>
+    /// <param name="tolerance">The tolerance in SI units.</param>
+    /// <param name="problem">What is wrong, where the text is refused; empty otherwise.</param>
+    /// <param name="advice">What to write instead, where the text is refused; empty otherwise.</param>
+    public static bool TryParseTolerance(
+        ReadOnlySpan<char> text, Dimension dimension, DefaultUnits defaults, out Tolerance tolerance, out string problem, out string advice)
+    {
+        var parse = new Parse(dimension, defaults);
+        var ok = parse.RunTolerance(Typed(text), out tolerance);
+        problem = parse.Problem;
+        advice = parse.Advice;
+        return ok;
+    }
+
+    // Text from documents has a minus sign and blanks of its own: they mean what the keyboard's mean.
+    private static ReadOnlySpan<char> Typed(ReadOnlySpan<char> text)
+    {
+        text = text.Trim();
+        return text.Length > LongestText || text.IndexOfAny('\u2212', '\u00a0', '\u202f') < 0
+            ? text
+            : text.ToString().Replace('\u2212', '-').Replace('\u00a0', ' ').Replace('\u202f', ' ');
     }
 
     // One attempt; holds what is to be said of a refused text.
@@ -34,6 +61,9 @@ public static class QuantityParser
         public string Problem { get; private set; } = "";
 
         public string Advice { get; private set; } = "";
+
+        // True where the tolerance names a unit other than the value's.
+        private bool toleranceHasOtherUnit;
 
         private readonly string Example => dimension switch
         {
@@ -50,7 +80,9 @@ public static class QuantityParser
             if (text.Length > LongestText)
                 return Refuse($"is {text.Length} characters long", Example);
             var spread = TakeSpread(ref text);
-            var split = FindTolerance(text);
+            var split = text.IsEmpty ? -1 : FindTolerance(text);
+            if (split == 0)
+                return Refuse($"'{Short(text)}' is a tolerance without a value", "write the value before it, such as 75 um ±10 %");
             var nominal = split < 0 ? text : text[..split].TrimEnd();
             if (!ReadNumber(nominal, out var number, out var unitText) || !ReadUnit(nominal, unitText, out var unit))
                 return false;
@@ -60,10 +92,33 @@ public static class QuantityParser
             var tolerance = Tolerance.None;
             if (split >= 0 && !ReadTolerance(text[split..], value, unit, spread ?? Spread.ThreeSigma, out tolerance))
                 return false;
+            if (unitText.IsEmpty && toleranceHasOtherUnit && dimension != Dimension.None)
+                return Refuse($"'{Short(text)}' gives its unit to the tolerance only", "write the unit after the value too, such as 75 um ±8 um");
             if (split < 0 && spread is not null)
                 return Refuse($"'{text}' names a spread but no tolerance", "write the tolerance before it, such as 75 um ±10 % uniform");
             quantity = new Quantity(value, tolerance);
             return true;
+        }
+
+        public bool RunTolerance(ReadOnlySpan<char> text, out Tolerance tolerance)
+        {
+            tolerance = default;
+            if (text.IsEmpty || text.Length > LongestText)
+                return Refuse(text.IsEmpty ? "is empty" : $"is {text.Length} characters long", Example);
+            var spread = TakeSpread(ref text) ?? Spread.ThreeSigma;
+            if (text is ['±' or '+', ..] || (text is ['-', ..] && text.Contains('/')))
+            {
+                // Without a value to take the unit from, bare bounds need a declared one, and a percentage means nothing: NaN shows that it was needed.
+                if (!ReadTolerance(text, double.NaN, defaults.Factors.TryGetValue(dimension, out var unit) ? unit : double.NaN, spread, out tolerance))
+                    return false;
+                return double.IsFinite(tolerance.Plus + tolerance.Minus) || Refuse($"'{Short(text)}' must be {DimensionWords.Name(dimension)} in absolute terms", Example);
+            }
+            if (!ReadNumber(text, out var number, out var unitText) || !ReadUnit(text, unitText, out var factor))
+                return false;
+            if (number < 0)
+                return Refuse($"the tolerance '{Short(text)}' is negative", "write it without a sign");
+            tolerance = new Tolerance(number * factor, number * factor, spread);
+            return double.IsFinite(tolerance.Plus) || Refuse($"the tolerance '{Short(text)}' is too large", Example);
         }
 
         private static Spread? TakeSpread(ref ReadOnlySpan<char> text)
@@ -78,12 +133,14 @@ public static class QuantityParser
             return null;
         }
 
-        // The tolerance begins at ± or at a sign that is neither the number's own nor its exponent's.
+        // The tolerance begins at ± or at a sign that is neither the number's own, nor its exponent's, nor the hyphen of ohm-m.
         private static int FindTolerance(ReadOnlySpan<char> text)
         {
             for (var i = 1; i < text.Length; i++)
             {
-                if (text[i] == '±' || (text[i] is '+' or '-' && text[i - 1] is not ('e' or 'E')))
+                if (text[i] == '±')
+                    return i;
+                if (text[i] is '+' or '-' && text[i - 1] is not ('e' or 'E') && !(i + 1 < text.Length && char.IsLetter(text[i - 1]) && char.IsLetter(text[i + 1])))
                     return i;
             }
             return text[0] == '±' ? 0 : -1;
@@ -107,6 +164,8 @@ public static class QuantityParser
             }
             if (double.TryParse(text[..end], NumberStyles.Float, CultureInfo.InvariantCulture, out number) && double.IsFinite(number))
                 return true;
+            if (text.IsEmpty)
+                return Refuse("a number is missing", Example);
             return Refuse($"'{Short(text)}' does not begin with a finite number", Example);
         }
 
@@ -151,7 +210,7 @@ public static class QuantityParser
         private bool ReadTwoSided(ReadOnlySpan<char> text, double value, double unit, Spread spread, out Tolerance tolerance)
         {
             tolerance = default;
-            var solidus = text.IndexOf('/');
+            var solidus = FindSecondBound(text);
             if (solidus < 2 || solidus + 2 >= text.Length)
                 return Refuse($"the tolerance '{Short(text)}' is not understood", "write ±8 um, ±10 %, or +8/-5 um");
             var first = text[..solidus].Trim();
@@ -163,6 +222,17 @@ public static class QuantityParser
                 return false;
             tolerance = first[0] == '+' ? new Tolerance(b, a, spread) : new Tolerance(a, b, spread);
             return true;
+        }
+
+        // The solidus that a sign follows; the one in ps/mm has a letter behind it.
+        private static int FindSecondBound(ReadOnlySpan<char> text)
+        {
+            for (var i = 0; i < text.Length; i++)
+            {
+                if (text[i] == '/' && text[(i + 1)..].TrimStart() is ['+' or '-', ..])
+                    return i;
+            }
+            return -1;
         }
 
         private bool ReadBound(ReadOnlySpan<char> text, double value, double unit, out double distance, out string? unitOfText, string? inherited)
@@ -179,24 +249,27 @@ public static class QuantityParser
                 unitOfText = unitText.ToString();
             if (unitText is "%")
                 distance = Math.Abs(value) * number / 100;
+            else if (unitText is "ppm")
+                distance = Math.Abs(value) * number / 1e6;
             else if (unitText.IsEmpty)
                 distance = number * unit;
             else if (ReadUnit(text, unitText, out var factor))
+            {
                 distance = number * factor;
+                toleranceHasOtherUnit |= factor != unit;
+            }
             else
+            {
                 return false;
-            return double.IsFinite(distance) || Refuse($"the tolerance '{Short(text)}' is too large", "write a finite tolerance");
+            }
+            return double.IsFinite(distance) || double.IsNaN(distance) || Refuse($"the tolerance '{Short(text)}' is too large", "write a finite tolerance");
         }
 
         private readonly string UnitAdvice(ReadOnlySpan<char> text)
         {
-            var word = text.ToString();
-            foreach (var unit in DimensionWords.Units(dimension))
-            {
-                if (string.Equals(unit, word, StringComparison.OrdinalIgnoreCase))
-                    return $"did you mean '{unit}'? Capitals matter: m is milli, M is mega";
-            }
-            return Example;
+            return UnitSpelling.WithOtherCapitals(text.ToString(), dimension) is { } unit
+                ? $"did you mean '{unit}'? Capitals matter: m is milli, M is mega"
+                : Example;
         }
 
         private bool Refuse(string problem, string advice)

@@ -1,6 +1,6 @@
 namespace StackTiming.Stackups.Quantities;
 
-/// <summary>Which nominal values a key accepts.</summary>
+/// <summary>Which values a key accepts, the bounds of their tolerance included.</summary>
 /// <param name="Least">Lowest value in SI units.</param>
 /// <param name="LeastAllowed">Whether the lowest value itself is accepted.</param>
 /// <param name="Most">Highest value in SI units, itself accepted.</param>
@@ -20,7 +20,11 @@ public sealed record QuantityRange(double Least, bool LeastAllowed, double Most,
     /// <param name="quantity">The quantity.</param>
     public string? Objection(Quantity quantity)
     {
-        var inside = quantity.Value <= Most && (LeastAllowed ? quantity.Value >= Least : quantity.Value > Least);
-        return inside ? null : Wording;
+        if (!Contains(quantity.Value))
+            return Wording;
+        // A value inside whose tolerance leaves the range would yield boards that cannot exist once values are drawn from it.
+        return Contains(quantity.Lowest) && Contains(quantity.Highest) ? null : Wording + " everywhere inside its tolerance";
     }
+
+    private bool Contains(double value) => value <= Most && (LeastAllowed ? value >= Least : value > Least);
 }

@@ -20,7 +20,9 @@ public readonly record struct Unit(Dimension Dimension, double Factor)
         name = name.Trim();
         if (name.IsEmpty || name.Length > 24)
             return false;
-        if (name.EndsWith("/sqrtHz", StringComparison.Ordinal) || name.EndsWith("/√Hz", StringComparison.Ordinal))
+        if (name is "oz/ft2" or "oz/ft²")
+            return TrySingle("oz", out unit);
+        if (name.EndsWith("/sqrtHz", StringComparison.Ordinal) || name.EndsWith("/sqrt(Hz)", StringComparison.Ordinal) || name.EndsWith("/√Hz", StringComparison.Ordinal))
         {
             var rest = name[..name.LastIndexOf('/')];
             if (!TryParse(rest, out var perLength) || perLength.Dimension != Dimension.ResistancePerLength)
@@ -31,7 +33,7 @@ public readonly record struct Unit(Dimension Dimension, double Factor)
         var solidus = name.LastIndexOf('/');
         if (solidus > 0)
             return TryPerLength(name[..solidus], name[(solidus + 1)..], out unit);
-        var blank = name.LastIndexOfAny(' ', '·', '*');
+        var blank = name.LastIndexOfAny(" ·⋅*-");
         if (blank > 0)
             return TryResistivity(name[..blank], name[(blank + 1)..], out unit);
         return TrySingle(name, out unit);
