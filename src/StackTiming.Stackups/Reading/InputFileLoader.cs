@@ -29,6 +29,8 @@ public static class InputFileLoader
     {
         var at = string.IsNullOrEmpty(from.File) ? FilePosition.WholeFile(path) : from;
         var shown = Suggestion.Shorten(path);
+        if (string.IsNullOrWhiteSpace(path) || path.Contains('\0', StringComparison.Ordinal))
+            return Refuse(problems, at, "the path of a file is empty or has a NUL character in it", "write the path of a file");
         try
         {
             if (Directory.Exists(path))
@@ -43,6 +45,10 @@ public static class InputFileLoader
             if (target.Length > largestBytes)
                 return Refuse(problems, at, $"'{shown}' has {target.Length >> 20} MiB; at most {largestBytes >> 20} MiB are read", "split it, or check that it is the right file");
             return File.ReadAllBytes(path);
+        }
+        catch (Exception missing) when (missing is FileNotFoundException or DirectoryNotFoundException)
+        {
+            return Refuse(problems, at, $"'{shown}' leads to a file that does not exist", "check where the link points");
         }
         catch (UnauthorizedAccessException)
         {
@@ -60,14 +66,15 @@ public static class InputFileLoader
     /// <param name="problems">Where problems go.</param>
     public static InputFile? Decode(string path, byte[] bytes, ProblemList problems)
     {
+        var name = "UTF-8";
         Encoding encoding = new UTF8Encoding(encoderShouldEmitUTF8Identifier: false, throwOnInvalidBytes: true);
         var skip = 0;
         if (bytes is [0xEF, 0xBB, 0xBF, ..])
             skip = 3;
         else if (bytes is [0xFF, 0xFE, ..])
-            (encoding, skip) = (new UnicodeEncoding(bigEndian: false, byteOrderMark: false, throwOnInvalidBytes: true), 2);
+            (encoding, skip, name) = (new UnicodeEncoding(bigEndian: false, byteOrderMark: false, throwOnInvalidBytes: true), 2, "UTF-16");
         else if (bytes is [0xFE, 0xFF, ..])
-            (encoding, skip) = (new UnicodeEncoding(bigEndian: true, byteOrderMark: false, throwOnInvalidBytes: true), 2);
+            (encoding, skip, name) = (new UnicodeEncoding(bigEndian: true, byteOrderMark: false, throwOnInvalidBytes: true), 2, "UTF-16");
         string text;
         try
         {
@@ -76,7 +83,7 @@ public static class InputFileLoader
         catch (DecoderFallbackException failure)
         {
             var line = 1 + bytes.AsSpan(0, Math.Clamp(failure.Index + skip, 0, bytes.Length)).Count((byte)'\n');
-            problems.Error(new FilePosition(path, line, 0), "the text is not valid UTF-8", "save the file as UTF-8");
+            problems.Error(new FilePosition(path, line, 0), $"the text is not valid {name}", "save the file as UTF-8");
             return null;
         }
         var nul = text.IndexOf('\0');

@@ -90,15 +90,27 @@ public sealed class MapReader(DataMap map, DefaultUnits units, ProblemList probl
             return null;
         if (!QuantityParser.TryParse(text, dimension, units, out var quantity, out var problem, out var advice))
         {
-            problems.Error(node.At, $"'{what}': {problem}", advice.Length == 0 ? null : advice);
+            problems.Error(node.At, $"'{Suggestion.Shorten(what)}': {problem}", advice.Length == 0 ? null : advice);
             return null;
         }
         if (range.Objection(quantity) is { } objection)
         {
-            problems.Error(node.At, $"'{what}' {objection}, but it says '{text}'");
+            problems.Error(node.At, $"'{Suggestion.Shorten(what)}' {objection}, but it says '{text}'");
             return null;
         }
         return quantity;
+    }
+
+    /// <summary>An optional tolerance that stands alone, such as <c>width-tolerance: 20 um</c>; no tolerance where the key is missing.</summary>
+    /// <param name="key">The key.</param>
+    /// <param name="dimension">What it must measure.</param>
+    public Tolerance Tolerance(string key, Dimension dimension)
+    {
+        if (Find(key) is not { } node || TextOf(node, key) is not { } text)
+            return Quantities.Tolerance.None;
+        if (!QuantityParser.TryParseTolerance(text, dimension, units, out var tolerance, out var problem, out var advice))
+            problems.Error(node.At, $"'{key}': {problem}", advice.Length == 0 ? null : advice);
+        return tolerance;
     }
 
     /// <summary>An optional choice between words.</summary>
@@ -130,7 +142,7 @@ public sealed class MapReader(DataMap map, DefaultUnits units, ProblemList probl
     {
         if (node is DataMap inner)
             return new MapReader(inner, units, problems);
-        problems.Error(node.At, $"'{what}' must be a mapping", $"write {what}: {{ key: value, … }}");
+        problems.Error(node.At, $"'{Suggestion.Shorten(what)}' must be a mapping", $"write {Suggestion.Shorten(what)}: {{ key: value, … }}");
         return null;
     }
 
@@ -166,7 +178,7 @@ public sealed class MapReader(DataMap map, DefaultUnits units, ProblemList probl
     {
         if (node is DataScalar scalar)
             return scalar.Text;
-        problems.Error(node.At, $"'{what}' must be a single value");
+        problems.Error(node.At, $"'{Suggestion.Shorten(what)}' must be a single value");
         return null;
     }
 
@@ -176,7 +188,7 @@ public sealed class MapReader(DataMap map, DefaultUnits units, ProblemList probl
         foreach (var entry in map.Entries)
         {
             if (!known.Contains(entry.Key))
-                problems.Error(entry.KeyAt, $"unknown key '{Suggestion.Shorten(entry.Key)}'", Suggestion.For(entry.Key, known));
+                problems.Error(entry.KeyAt, $"unknown key '{Suggestion.Shorten(entry.Key)}'", problems.IsFull ? null : Suggestion.For(entry.Key, known));
         }
     }
 

@@ -9,6 +9,9 @@ public sealed class ProblemList
     /// <summary>How many problems are kept.</summary>
     public const int Capacity = 200;
 
+    // Readers shorten what they quote; this bound holds for what they forget.
+    private const int LongestText = 1000;
+
     private readonly List<Problem> problems = [];
 
     /// <summary>The problems kept, in the order in which they were found.</summary>
@@ -16,6 +19,9 @@ public sealed class ProblemList
 
     /// <summary>Number of problems found beyond <see cref="Capacity"/>.</summary>
     public int Omitted { get; private set; }
+
+    /// <summary>True where further problems are only counted, so that nobody need word them with care.</summary>
+    public bool IsFull => problems.Count >= Capacity;
 
     /// <summary>Number of errors found so far, kept or not; a reader compares it before and after to know whether its own part was whole.</summary>
     public int ErrorCount { get; private set; }
@@ -42,9 +48,15 @@ public sealed class ProblemList
 
     private void Keep(Problem problem)
     {
-        if (problems.Count < Capacity)
-            problems.Add(problem);
-        else
+        if (IsFull)
+        {
             Omitted++;
+            return;
+        }
+        problems.Add(problem with
+        {
+            Message = ProblemText.Cut(problem.Message, LongestText),
+            Advice = problem.Advice is { } advice ? ProblemText.Cut(advice, LongestText) : null,
+        });
     }
 }

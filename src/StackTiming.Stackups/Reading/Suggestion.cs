@@ -13,17 +13,19 @@ public static class Suggestion
         var sorted = known.Order(StringComparer.Ordinal).ToArray();
         if (sorted.Length == 0)
             return null;
-        if (word.Length <= 64)
+        if (sorted.FirstOrDefault(k => string.Equals(k, word, StringComparison.OrdinalIgnoreCase)) is { } same)
+            return $"did you mean '{Shorten(same)}'?";
+        if (word.Length is > 0 and <= 64)
         {
             var (distance, nearest) = sorted.Select(k => (Levenshtein.GetDistance(word, k), k)).Min();
             if (distance <= Math.Max(1, (word.Length + 1) / 3))
-                return $"did you mean '{nearest}'?";
+                return $"did you mean '{Shorten(nearest)}'?";
         }
         const int most = 12;
-        return "it can be " + string.Join(", ", sorted.Take(most)) + (sorted.Length > most ? ", …" : "");
+        return "it can be " + string.Join(", ", sorted.Take(most).Select(Shorten)) + (sorted.Length > most ? ", …" : "");
     }
 
     /// <summary>Text from a file, cut to a length that fits into a message.</summary>
     /// <param name="text">The text.</param>
-    public static string Shorten(string text) => text.Length <= 60 ? text : string.Concat(text.AsSpan(0, 57), "…");
+    public static string Shorten(string text) => ProblemText.Cut(text, 60);
 }

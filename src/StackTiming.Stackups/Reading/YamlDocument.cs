@@ -1,3 +1,4 @@
+using System.Buffers;
 using System.Collections.Immutable;
 using YamlDotNet.Core;
 using YamlDotNet.Core.Events;
@@ -33,6 +34,9 @@ public static class YamlDocument
             return null;
         }
     }
+
+    private static readonly SearchValues<char> ControlCharacters =
+        SearchValues.Create([.. Enumerable.Range(0, 0xA0).Select(c => (char)c).Where(c => char.IsControl(c) && c is not ('\t' or '\n' or '\r'))]);
 
     private sealed class Reader(InputFile file, ProblemList problems)
     {
@@ -78,7 +82,12 @@ public static class YamlDocument
             if (nodes > MostNodes || depth > DeepestNesting)
                 throw new YamlException(parser.Current!.Start, parser.Current.End, depth > DeepestNesting ? YamlWording.TooDeep : YamlWording.TooLarge);
             if (parser.TryConsume<Scalar>(out var scalar))
+            {
+                // Names end up on terminals and in reports; escapes such as "\e" have no use there.
+                if (scalar.Value.AsSpan().IndexOfAny(ControlCharacters) >= 0)
+                    Object(scalar, "the text has a control character in it", "write the text without it");
                 return new DataScalar(At(scalar), scalar.Value, scalar.Style is not (ScalarStyle.Plain or ScalarStyle.Any));
+            }
             if (parser.TryConsume<SequenceStart>(out var sequence))
                 return List(sequence, depth);
             var start = parser.Consume<MappingStart>();
@@ -90,7 +99,11 @@ public static class YamlDocument
             var items = ImmutableArray.CreateBuilder<DataNode>();
             while (!parser.TryConsume<SequenceEnd>(out _))
             {
-                if (Node(depth + 1) is { } item)
+                if (Node(depth + 1) is not { } item)
+                    continue;
+                if (IsNull(item))
+                    Object(item.At, "the list has an item without a value", "write the value after the -, or remove the item");
+                else
                     items.Add(item);
             }
             return new DataList(At(start), items.ToImmutable());
@@ -107,13 +120,17 @@ public static class YamlDocument
                 if (key is not DataScalar name)
                 {
                     if (key is not null)
-                        Object(start, "a key must be a single word", null);
+                        Object(key.At, "a key must be a single word", "put a text that begins with a bracket in quotes");
                     continue;
                 }
                 if (value is null)
                     continue;
-                if (value is DataScalar { Quoted: false, Text: "" or "~" or "null" })
-                    Object(name.At, $"'{Suggestion.Shorten(name.Text)}' has no value", "write one after the colon, or remove the key");
+                if (!name.Quoted && (name.Text.Contains(":{", StringComparison.Ordinal) || name.Text.Contains(":[", StringComparison.Ordinal)))
+                    Object(name.At, $"no blank follows the colon in '{Suggestion.Shorten(name.Text)}'", "write key: { … }, with a blank after the colon");
+                else if (name.Text.Length == 0)
+                    Object(name.At, "a key is empty", "write the key before the colon");
+                else if (IsNull(value))
+                    Object(name.At, $"'{Suggestion.Shorten(name.Text)}' has no value", AdviceForNoValue(name));
                 else if (!first.TryAdd(name.Text, name.At))
                     Object(name.At, $"'{Suggestion.Shorten(name.Text)}' stands twice", $"keep one; the first is in line {first[name.Text].Line}");
                 else
@@ -121,6 +138,13 @@ public static class YamlDocument
             }
             return new DataMap(At(start), entries.ToImmutable());
         }
+
+        private static bool IsNull(DataNode node) => node is DataScalar { Quoted: false, Text: "" or "~" or "null" };
+
+        // Inside braces, dk:3.9 is a key of that name to YAML.
+        private static string AdviceForNoValue(DataScalar key) => !key.Quoted && key.Text.IndexOf(':', StringComparison.Ordinal) is var colon and > 0
+            ? $"put a blank after the colon: {Suggestion.Shorten(key.Text[..colon])}: {Suggestion.Shorten(key.Text[(colon + 1)..])}"
+            : "write one after the colon, or remove the key";
 
         private FilePosition At(ParsingEvent node) => new(file.Path, (int)node.Start.Line, (int)node.Start.Column);
 
