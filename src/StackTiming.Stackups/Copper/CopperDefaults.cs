@@ -7,25 +7,33 @@ namespace StackTiming.Stackups.Copper;
 /// What a stack-up says of its copper, for all layers or for one. Where it says nothing: resistivity 1.72e-8 ohm m (annealed copper, IEC 60028
 /// gives 1.7241e-8 at 20 °C), smooth faces, vertical walls.
 /// </summary>
-/// <param name="Resistivity">Resistivity, ohm metres.</param>
-/// <param name="Roughness">Root-mean-square roughness, metres.</param>
+/// <param name="Resistivity">Resistivity, ohm metres, or null.</param>
+/// <param name="Roughness">Root-mean-square roughness, metres, or null.</param>
 /// <param name="EtchFactor">Thickness over undercut of one side, or null.</param>
 /// <param name="Undercut">Undercut of one side, metres; wins over the etch factor; or null.</param>
-public sealed record CopperDefaults(Quantity Resistivity, Quantity Roughness, Quantity? EtchFactor, Quantity? Undercut)
+public sealed record CopperDefaults(Quantity? Resistivity, Quantity? Roughness, Quantity? EtchFactor, Quantity? Undercut)
 {
     private static readonly QuantityRange Factor = new(0.1, true, 1000, "must be between 0.1 and 1000");
     private static readonly QuantityRange RoughnessRange = new(0, true, 20e-6, "must be between zero and 20 um");
     private static readonly QuantityRange ResistivityRange = new(1e-9, true, 1e-3, "must be between 1e-9 and 1e-3 ohm m");
 
-    private static CopperDefaults Plain { get; } = new(Quantity.Exact(1.72e-8), Quantity.Exact(0), null, null);
+    private const double AnnealedOhmMetres = 1.72e-8;
+
+    private static CopperDefaults Silent { get; } = new(null, null, null, null);
+
+    /// <summary>True where nothing is said of the faces' roughness.</summary>
+    public bool LacksRoughness => Roughness is null;
+
+    /// <summary>True where nothing is said of the shape after etching.</summary>
+    public bool LacksShape => EtchFactor is null && Undercut is null;
 
     /// <summary>Reads the <c>copper:</c> mapping of a stack-up.</summary>
     /// <param name="map">The mapping, or null where the stack-up has none.</param>
     public static CopperDefaults Read(MapReader? map)
     {
         if (map is null)
-            return Plain;
-        var result = Plain.With(map);
+            return Silent;
+        var result = Silent.With(map);
         map.Finish();
         return result;
     }
@@ -51,7 +59,7 @@ public sealed record CopperDefaults(Quantity Resistivity, Quantity Roughness, Qu
         var undercut = Undercut ?? (EtchFactor is { } factor
             ? new Quantity(thickness.Value / factor.Value, Scaled(factor.Tolerance, thickness.Value / (factor.Value * factor.Value)))
             : Quantity.Exact(0));
-        return new CopperProperties(Resistivity, Roughness, undercut);
+        return new CopperProperties(Resistivity ?? Quantity.Exact(AnnealedOhmMetres), Roughness ?? Quantity.Exact(0), undercut);
     }
 
     // A larger etch factor undercuts less: the bounds change sides.

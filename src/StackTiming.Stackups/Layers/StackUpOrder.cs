@@ -27,7 +27,7 @@ internal static class StackUpOrder
                     if (!names.TryAdd(copper.Name, copper.At))
                         problems.Error(copper.At, $"the copper layer '{Suggestion.Shorten(copper.Name)}' stands twice", $"the first is in line {names[copper.Name].Line}; give each a name of its own");
                     if (i > 0 && layers[i - 1] is CopperLayer above)
-                        problems.Error(copper.At, $"no dielectric lies between '{above.Name}' and '{copper.Name}'", "write the core or prepreg between them");
+                        problems.Error(copper.At, $"no dielectric lies between '{Suggestion.Shorten(above.Name)}' and '{Suggestion.Shorten(copper.Name)}'", "write the core or prepreg between them");
                     break;
                 default:
                     break;
@@ -68,7 +68,7 @@ internal static class StackUpOrder
         // A foil between two sheets of a kind was pressed onto the inner part of the board.
         var face = upperHalf ? WideFace.Down : WideFace.Up;
         if (copper.Use != CopperUse.Plane && copper.Copper.UndercutMetres.Value > 0)
-            problems.Note(copper.At, $"'{copper.Name}' lies between two layers of one kind; its wide face is taken to be the {(face == WideFace.Up ? "upper" : "lower")} one", "write base: up or base: down");
+            problems.Note(copper.At, $"'{Suggestion.Shorten(copper.Name)}' lies between two layers of one kind; its wide face is taken to be the {(face == WideFace.Up ? "upper" : "lower")} one", "write base: up or base: down");
         return face;
     }
 }

@@ -49,12 +49,15 @@ public static class StackUpReader
         var revision = file.Text("revision") ?? "";
         var dielectrics = ReadDielectrics(file);
         var defaults = CopperDefaults.Read(file.Map("copper"));
-        var layers = ReadLayers(file, dielectrics, defaults, allowThinCopper);
+        var silences = new CopperSilences();
+        var layers = ReadLayers(file, dielectrics, defaults, allowThinCopper, silences);
         file.Finish();
-        StackUpOrder.Check(map.At, layers, problems);
+        if (layers is { } whole)
+            StackUpOrder.Check(map.At, whole, problems);
         if (problems.ErrorCount > errorsBefore)
             return null;
-        return new StackUp(name, revision, StackUpOrder.WithWideFaces(layers, problems));
+        silences.Note(file.PositionOf("copper"), problems);
+        return new StackUp(name, revision, StackUpOrder.WithWideFaces(layers!.Value, problems));
     }
 
     private static Dictionary<string, Dielectric> ReadDielectrics(MapReader file)
@@ -63,43 +66,53 @@ public static class StackUpReader
         foreach (var entry in file.Named("dielectrics"))
         {
             if (file.MapOf(entry.Value, entry.Key) is not { } map)
+            {
+                found[entry.Key] = Unread(entry.Key);
                 continue;
+            }
             var dk = map.NeedQuantity("dk", Dimension.None, Permittivity, "dk: 3.9");
             var df = map.Quantity("df", Dimension.None, LossTangent);
             var at = map.Quantity("at", Dimension.Frequency, QuantityRange.Positive);
             var resin = map.Quantity("resin", Dimension.Ratio, Share);
             map.Finish();
             if (!map.Has("df"))
-                file.Problems.Note(map.At, $"'{entry.Key}' states no df and counts as lossless", "write df: 0.02");
+                file.Problems.Note(map.At, $"'{Suggestion.Shorten(entry.Key)}' states no df and counts as lossless", "write df: 0.02");
             else if (at is null && !map.Has("at"))
-                file.Problems.Note(map.At, $"'{entry.Key}' does not say at which frequency its dk and df hold; 1 GHz is taken", "write at: 1 GHz");
+                file.Problems.Note(map.At, $"'{Suggestion.Shorten(entry.Key)}' does not say at which frequency its dk and df hold; 1 GHz is taken", "write at: 1 GHz");
             if (string.Equals(entry.Key, "air", StringComparison.OrdinalIgnoreCase) && dk is { Value: not 1 })
                 file.Problems.Error(entry.KeyAt, "the name 'air' is kept for the space around the board", "choose another name");
-            // A material whose numbers are refused still counts as named, so that its layers are not reported too.
             found[entry.Key] = new Dielectric(entry.Key, dk ?? Quantity.Exact(1), df ?? Quantity.Exact(0), at?.Value ?? 1e9, resin);
         }
         return found;
     }
 
-    private static ImmutableArray<Layer> ReadLayers(MapReader file, Dictionary<string, Dielectric> dielectrics, CopperDefaults defaults, bool allowThinCopper)
+    // A material that is refused still counts as named, so that its layers are not reported too.
+    private static Dielectric Unread(string name) => new(name, Quantity.Exact(1), Quantity.Exact(0), 1e9, null);
+
+    // Null where a layer is refused: what then seems to be missing between its neighbours is not.
+    private static ImmutableArray<Layer>? ReadLayers(
+        MapReader file, Dictionary<string, Dielectric> dielectrics, CopperDefaults defaults, bool allowThinCopper, CopperSilences silences)
     {
         if (file.Need("layers", "layers: with one entry a layer, from the top face to the bottom face") is not { } node)
-            return [];
+            return null;
         if (node is not DataList list)
         {
             file.Problems.Error(node.At, "'layers' must be a list", "begin each layer with - { copper: L1, … }");
-            return [];
+            return null;
         }
         var layers = ImmutableArray.CreateBuilder<Layer>();
         foreach (var item in list.Items)
         {
-            if (file.MapOf(item, "layers") is { } map && ReadLayer(map, dielectrics, defaults, allowThinCopper) is { } layer)
+            if (item is not DataMap entry)
+                file.Problems.Error(item.At, "a layer must be a mapping", "write - { copper: L1, thickness: …, use: … } or - { core: MATERIAL, thickness: … }");
+            else if (ReadLayer(new MapReader(entry, file.Units, file.Problems), dielectrics, defaults, allowThinCopper, silences) is { } layer)
                 layers.Add(layer);
         }
-        return layers.ToImmutable();
+        return layers.Count == list.Items.Length ? layers.ToImmutable() : null;
     }
 
-    private static Layer? ReadLayer(MapReader map, Dictionary<string, Dielectric> dielectrics, CopperDefaults defaults, bool allowThinCopper)
+    private static Layer? ReadLayer(
+        MapReader map, Dictionary<string, Dielectric> dielectrics, CopperDefaults defaults, bool allowThinCopper, CopperSilences silences)
     {
         var kinds = LayerKinds.Where(map.Has).ToArray();
         if (kinds.Length != 1)
@@ -110,7 +123,7 @@ public static class StackUpReader
         }
         Layer? layer = kinds[0] switch
         {
-            "copper" => ReadCopper(map, defaults, allowThinCopper),
+            "copper" => ReadCopper(map, defaults, allowThinCopper, silences),
             "mask" => ReadMask(map, dielectrics),
             var kind => ReadDielectricLayer(map, kind, dielectrics),
         };
@@ -118,19 +131,23 @@ public static class StackUpReader
         return layer;
     }
 
-    private static CopperLayer? ReadCopper(MapReader map, CopperDefaults defaults, bool allowThinCopper)
+    private static CopperLayer? ReadCopper(MapReader map, CopperDefaults defaults, bool allowThinCopper, CopperSilences silences)
     {
         var name = map.Text("copper");
+        if (name is not null && string.IsNullOrWhiteSpace(name))
+            map.Problems.Error(map.PositionOf("copper"), "the copper layer has no name", "write copper: L1");
         var thickness = map.NeedQuantity("thickness", Dimension.Length, allowThinCopper ? ThinOrThick : Thickness, "thickness: 35 um");
         map.Need("use", "use: signal, use: plane or use: mixed");
         var use = map.Choice("use", Uses);
-        var width = map.Quantity("width-tolerance", Dimension.Length, QuantityRange.NotNegative);
+        var width = map.Tolerance("width-tolerance", Dimension.Length);
         var face = map.Choice("base", Faces);
-        var copper = defaults.With(map).For(thickness ?? Quantity.Exact(0));
+        var stated = defaults.With(map);
         if (name is null || thickness is null || use is null)
             return null;
-        return new CopperLayer(map.At, name, thickness.Value, use.Value, copper, face ?? WideFace.Down,
-            width is { } w ? Tolerance.Symmetric(w.Value) : Tolerance.None) { WideFaceStated = face is not null };
+        // Planes are taken as flat, and copper without thickness has no walls.
+        if (use != CopperUse.Plane && thickness.Value.Value > 0)
+            silences.Add(name, stated);
+        return new CopperLayer(map.At, name, thickness.Value, use.Value, stated.For(thickness.Value), face ?? WideFace.Down, width) { WideFaceStated = face is not null };
     }
 
     private static DielectricLayer? ReadDielectricLayer(MapReader map, string kind, Dictionary<string, Dielectric> dielectrics)
