@@ -44,7 +44,9 @@ public static class SectionFileReader
             case DataMap inline:
                 return StackUpReader.Read(inline, reader.Problems, allowThinCopper: true);
             case DataScalar { Text.Length: > 0 } reference:
-                var target = Path.Combine(Path.GetDirectoryName(path) ?? "", reference.Text);
+                if (InputPath.Resolve(path, reference.Text, reader.Problems, reference.At) is not { } target)
+                    return null;
+                InputPath.NoteIfOutside(Path.GetDirectoryName(path) ?? "", target, reader.Problems, reference.At);
                 return InputFileLoader.Load(target, reference.At, reader.Problems) is { } file && YamlDocument.ReadMap(file, reader.Problems) is { } map
                     ? StackUpReader.Read(map, reader.Problems, allowThinCopper: true)
                     : null;

@@ -62,9 +62,9 @@ public static class NetSketchReader
             case DataMap inline:
                 return StackUpReader.Read(inline, reader.Problems);
             case var node:
-                if (reader.TextOf(node, "stackup") is not { } relative)
+                if (reader.TextOf(node, "stackup") is not { } relative || InputPath.Resolve(sketchPath, relative, reader.Problems, node.At) is not { } path)
                     return null;
-                var path = Path.Combine(Path.GetDirectoryName(sketchPath) ?? "", relative);
+                InputPath.NoteIfOutside(Path.GetDirectoryName(sketchPath) ?? "", path, reader.Problems, node.At);
                 return InputFileLoader.Load(path, node.At, reader.Problems) is { } file ? StackUpReader.Read(file, reader.Problems) : null;
         }
     }

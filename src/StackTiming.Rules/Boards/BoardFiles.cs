@@ -14,7 +14,7 @@ public sealed class BoardFiles(string boardPath, ProblemList problems)
     // Room for some two million routed segments; longer text does not fit into one string.
     private const long LargestLengthList = 900L << 20;
 
-    private readonly string home = Path.TrimEndingDirectorySeparator(Folder(Path.GetFullPath(boardPath))) + Path.DirectorySeparatorChar;
+    private readonly string home = Path.GetDirectoryName(Path.GetFullPath(boardPath)) ?? "";
     private readonly Dictionary<string, InputFile?> loaded = new(StringComparer.Ordinal);
     private readonly Dictionary<string, DataMap?> parsed = new(StringComparer.Ordinal);
     private readonly HashSet<string> outsideFull = new(StringComparer.Ordinal);
@@ -32,14 +32,9 @@ public sealed class BoardFiles(string boardPath, ProblemList problems)
     /// <returns>The path, or null with a problem.</returns>
     public string? Resolve(string path, FilePosition from)
     {
-        if (string.IsNullOrWhiteSpace(path) || path.Contains('\0', StringComparison.Ordinal))
-        {
-            problems.Error(from, "the path is empty", "write the path of a file, relative to this one");
+        if (InputPath.Resolve(from.File, path, problems, from) is not { } shown)
             return null;
-        }
-        var shown = Path.IsPathRooted(path) ? path : Normal(Path.Combine(Folder(from.File), path));
-        var full = Path.GetFullPath(shown);
-        if (!full.StartsWith(home, StringComparison.Ordinal) && outsideFull.Add(full))
+        if (!InputPath.LiesInside(home, shown) && outsideFull.Add(Path.GetFullPath(shown)))
             outside.Add(Suggestion.Shorten(shown));
         return shown;
     }
@@ -82,23 +77,5 @@ public sealed class BoardFiles(string boardPath, ProblemList problems)
         var map = Load(shown, from, role) is { } file ? YamlDocument.ReadMap(file, problems) : null;
         parsed[full] = map;
         return map;
-    }
-
-    private static string Folder(string path) => Path.GetDirectoryName(path) ?? "";
-
-    /// <summary>Takes <c>x/..</c> out of a relative path, so that messages stay short; leading <c>..</c> remain.</summary>
-    private static string Normal(string path)
-    {
-        if (Path.IsPathRooted(path))
-            return Path.GetFullPath(path);
-        var parts = new List<string>();
-        foreach (var part in path.Split('/', '\\'))
-        {
-            if (part == ".." && parts.Count > 0 && parts[^1] != "..")
-                parts.RemoveAt(parts.Count - 1);
-            else if (part.Length > 0 && part != ".")
-                parts.Add(part);
-        }
-        return string.Join('/', parts);
     }
 }
