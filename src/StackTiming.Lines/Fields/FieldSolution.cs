@@ -17,10 +17,10 @@ public sealed class FieldSolution
     private readonly ConductorPairs pairs;
 
     internal FieldSolution(
-        CrossSection section, LineSolution line, SectionFrame frame, SectionSurfaces surfaces, ConductorPairs pairs, SolvedMesh mesh)
+        CrossSection section, LineSolution line, SectionFrame frame, SectionSurfaces surfaces, ConductorPairs pairs, SolvedMesh mesh, int level)
     {
         (Section, Line) = (section, line);
-        (this.frame, this.surfaces, this.pairs, Mesh) = (frame, surfaces, pairs, mesh);
+        (this.frame, this.surfaces, this.pairs, Mesh, Level) = (frame, surfaces, pairs, mesh, level);
     }
 
     /// <summary>The section that was solved.</summary>
@@ -33,6 +33,8 @@ public sealed class FieldSolution
     public int Unknowns => Mesh.Unknowns;
 
     internal SolvedMesh Mesh { get; }
+
+    internal int Level { get; }
 
     internal SectionFrame Frame => frame;
 

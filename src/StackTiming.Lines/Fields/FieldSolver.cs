@@ -1,11 +1,6 @@
-using System.Collections.Immutable;
 using System.Globalization;
-using MathNet.Numerics.LinearAlgebra;
-using StackTiming.Lines.Constants;
-using StackTiming.Lines.Fields.Geometry;
 using StackTiming.Lines.Fields.Kernels;
 using StackTiming.Lines.Fields.Panels;
-using StackTiming.Lines.Fields.Systems;
 using StackTiming.Lines.Sections;
 using StackTiming.Lines.Solutions;
 
@@ -82,18 +77,12 @@ public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
     /// </exception>
     public FieldSolution Solve(CrossSection section)
     {
-        SectionChecks.Check(section);
-        var tolerance = SectionChecks.Tolerance(section);
-        var frame = SectionFrame.Of(section, tolerance);
-        var framed = frame.Apply(section);
-        var surfaces = SectionSurfaces.Of(framed, frame.Symmetric, tolerance);
-        var pairs = new ConductorPairs(framed.Conductors, frame.Symmetric, tolerance);
+        var solvable = new SolvableSection(section);
         SolvedMesh? coarse = null;
-        double[,] inductance = new double[0, 0], coarseInductance = inductance;
-        var error = UncheckedError;
-        foreach (var (level, floor) in Levels)
+        var (error, reached) = (UncheckedError, 0);
+        for (var level = 0; level < Levels.Length; level++)
         {
-            var mesh = PanelMesh.Of(surfaces, framed.BottomPlaneMetres, framed.TopPlaneMetres, frame.Symmetric, level);
+            var mesh = solvable.Mesh(Levels[level].Degrees);
             if (mesh.Unknowns > options.MostUnknowns)
             {
                 if (coarse is null)
@@ -101,60 +90,40 @@ public sealed class FieldSolver(FieldSolverOptions options) : ILineCalculator
                 break;
             }
 
-            var fine = new SolvedMesh(framed, surfaces, pairs, frame.Symmetric, mesh);
-            inductance = Inductance(fine.EmptyCapacitance);
-            if (coarse is not null)
-            {
-                error = Math.Max(Difference(fine.FilledCapacitance, coarse.FilledCapacitance), Difference(inductance, coarseInductance));
-                error = double.IsNaN(error) ? error : Math.Max(error, floor);
-            }
-
+            var fine = solvable.Solve(mesh);
             var isCompared = coarse is not null;
-            (coarse, coarseInductance) = (fine, inductance);
+            if (coarse is not null)
+                error = Math.Max(Difference(fine, coarse), Levels[level].Floor);
+            (coarse, reached) = (fine, level);
             if (isCompared && error <= options.RelativeTolerance)
                 break;
         }
 
-        return Result(section, frame, surfaces, pairs, coarse!, inductance, error);
+        return solvable.Result(coarse!, reached, error, error <= options.RelativeTolerance ? [] : [Unrefined(error)]);
     }
 
-    private FieldSolution Result(
-        CrossSection section,
-        SectionFrame frame,
-        SectionSurfaces surfaces,
-        ConductorPairs pairs,
-        SolvedMesh mesh,
-        double[,] inductance,
-        double error)
+    /// <summary>
+    /// Solves a section on the mesh of one level alone, for differences between sections that are nearly alike; the error is only known
+    /// to be that of the level.
+    /// </summary>
+    internal static FieldSolution SolveAt(CrossSection section, int level)
     {
-        foreach (var value in mesh.FilledCapacitance.Cast<double>().Concat(inductance.Cast<double>()).Append(error))
-        {
-            if (!double.IsFinite(value))
-                throw new SectionNotSolvableException(
-                    "The equations of the cross-section have no finite solution; its dimensions may be too far apart.");
-        }
-
-        ImmutableArray<string> warnings = error <= options.RelativeTolerance
-            ? []
-            : [string.Create(CultureInfo.InvariantCulture,
-                $"The field solver stopped at an estimated error of {error:P2}; {options.RelativeTolerance:P2} was asked for.")];
-        var shares = EnergyPicture.Shares(mesh, surfaces.Regions.Media, EnergyPicture.StandardDrive(pairs.Signals));
-        var line = new LineSolution(
-            [.. section.Signals.Select(c => c.Name)], MethodId, mesh.FilledCapacitance, inductance, shares, error, warnings);
-        return new FieldSolution(section, line, frame, surfaces, pairs, mesh);
+        var solvable = new SolvableSection(section);
+        return solvable.Result(solvable.Solve(solvable.Mesh(Levels[level].Degrees)), level, UncheckedError, []);
     }
+
+    private string Unrefined(double error) => string.Create(
+        CultureInfo.InvariantCulture,
+        $"The field solver stopped at an estimated error of {error:P2}; {options.RelativeTolerance:P2} was asked for.");
 
     private string TooMany(int unknowns) => string.Create(
         CultureInfo.InvariantCulture,
         $"The cross-section needs {unknowns} unknowns on the coarsest mesh, more than the {options.MostUnknowns} allowed; ")
         + "divide it into sections with fewer conductors.";
 
-    private static double[,] Inductance(double[,] emptyCapacitance)
-    {
-        var inverse = Matrix<double>.Build.DenseOfArray(emptyCapacitance).Inverse();
-        const double scale = Vacuum.Mu0 * Vacuum.Epsilon0;
-        return (inverse * scale).ToArray();
-    }
+    private static double Difference(SolvedMesh fine, SolvedMesh coarse) => Math.Max(
+        Difference(fine.FilledCapacitance, coarse.FilledCapacitance),
+        Difference(SolvableSection.Inductance(fine), SolvableSection.Inductance(coarse)));
 
     /// <summary>
     /// Largest difference of two matrices relative to the entry, or to a hundredth of the largest entry where it is smaller than that.

@@ -20,7 +20,7 @@ public sealed class SectionSensitivitiesTests
         foreach (var parameter in SectionParameters.Of(section).Where(p => p.Kind == ParameterKind.DielectricConstant))
         {
             var exact = solution.CapacitanceSlope(parameter.Subject);
-            var difference = SectionSensitivities.ByDifferences(Fine, solution, parameter).CapacitanceSlope;
+            var difference = SectionSensitivities.Of(solution, parameter).CapacitanceSlope;
             var largest = exact.Cast<double>().Max(Math.Abs);
             for (var i = 0; i < 2; i++)
             {
@@ -123,5 +123,25 @@ public sealed class SectionSensitivitiesTests
         Assert.Equal(0.01 * 4 * Vacuum.Epsilon0 / 100e-6, width.LossCapacitanceSlope[0, 0], 0.01 * 0.01 * 4 * Vacuum.Epsilon0 / 100e-6);
         var conductance = 0.01 * 4 * Vacuum.Epsilon0 * 60e-3 / 100e-6;
         Assert.Equal(-conductance / 100e-6, height.LossCapacitanceSlope[0, 0], 0.02 * conductance / 100e-6);
+    }
+
+    [Fact]
+    public void One_step_is_as_good_as_stated_against_two_steps_extrapolated()
+    {
+        var section = Section(
+            [Slab("core", 4.2, 0, 90), Slab("ply", 3.4, 90, 160)], [Trace("a", 0, 120, 100, 35, 160), Trace("b", 240, 90, 80, 35, 90)],
+                mask: Mask(3.6, 20, 15));
+        var coarse = new FieldSolver(new FieldSolverOptions(1e-4)).Solve(section);
+        var fine = Fine.Solve(section);
+        foreach (var parameter in SectionParameters.Of(section))
+        {
+            var (once, twice) = (SectionSensitivities.Of(coarse, parameter), SectionSensitivities.Extrapolated(fine, parameter));
+            Assert.True(Distance(once.CapacitanceSlope, twice.CapacitanceSlope, fine.Line.CapacitanceFaradPerMetre) < once.RelativeError);
+            Assert.True(Distance(once.InductanceSlope, twice.InductanceSlope, fine.Line.InductanceHenryPerMetre) < once.RelativeError);
+            Assert.True(twice.RelativeError < 1e-3);
+            double Distance(double[,] a, double[,] b, double[,] value) =>
+                a.Cast<double>().Zip(b.Cast<double>(), (x, y) =>
+                    Math.Abs(x - y)).Max() * parameter.Scale / value.Cast<double>().Max(Math.Abs);
+        }
     }
 }
