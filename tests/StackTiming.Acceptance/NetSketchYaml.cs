@@ -9,10 +9,29 @@ public static class NetSketchYaml
 {
     private static readonly Dictionary<string, string> Units = new()
     {
-        ["low"] = "V", ["high"] = "V", ["resistance"] = "ohm", ["rise"] = "s", ["fall"] = "s", ["inductance"] = "H", ["capacitance"] = "F",
-        ["z0"] = "ohm", ["delay"] = "s", ["length"] = "m", ["l"] = "H/m", ["c"] = "F/m", ["r-dc"] = "ohm/m", ["r-skin"] = "ohm/m/sqrtHz",
-        ["z-even"] = "ohm", ["z-odd"] = "ohm", ["delay-even"] = "s", ["delay-odd"] = "s",
-        ["vil"] = "V", ["vih"] = "V", ["threshold"] = "V", ["bit"] = "s", ["duration"] = "s",
+        ["low"] = "V",
+        ["high"] = "V",
+        ["resistance"] = "ohm",
+        ["rise"] = "s",
+        ["fall"] = "s",
+        ["inductance"] = "H",
+        ["capacitance"] = "F",
+        ["z0"] = "ohm",
+        ["delay"] = "s",
+        ["length"] = "m",
+        ["l"] = "H/m",
+        ["c"] = "F/m",
+        ["r-dc"] = "ohm/m",
+        ["r-skin"] = "ohm/m/sqrtHz",
+        ["z-even"] = "ohm",
+        ["z-odd"] = "ohm",
+        ["delay-even"] = "s",
+        ["delay-odd"] = "s",
+        ["vil"] = "V",
+        ["vih"] = "V",
+        ["threshold"] = "V",
+        ["bit"] = "s",
+        ["duration"] = "s",
     };
 
     /// <summary>The sketch.</summary>

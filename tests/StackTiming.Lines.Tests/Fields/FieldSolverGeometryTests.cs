@@ -176,7 +176,8 @@ public sealed class FieldSolverGeometryTests
         var infinite = BareTrace(150, 100, 4.0);
         CrossSection Over(params SectionConductor[] plane) => infinite with
         {
-            BottomPlaneMetres = null, Conductors = [infinite.Conductors[0], .. plane],
+            BottomPlaneMetres = null,
+            Conductors = [infinite.Conductors[0], .. plane],
         };
         double Z(CrossSection section) => FieldSolver.Default.Solve(section).Line.Z0Ohms;
 

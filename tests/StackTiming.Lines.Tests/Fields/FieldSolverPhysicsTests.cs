@@ -179,8 +179,11 @@ public sealed class FieldSolverPhysicsTests
     public void Surface_charges_sum_to_those_of_the_capacitance_matrix()
     {
         var section = Section(
-            [Slab("a", 4, 0, 100)], [Trace("x", -90, 100, 80, 30, 100), Trace("y", 90, 100, 80, 30, 100)]) with { TopMask = Mask(4, 20,
-                20) };
+            [Slab("a", 4, 0, 100)], [Trace("x", -90, 100, 80, 30, 100), Trace("y", 90, 100, 80, 30, 100)]) with
+        {
+            TopMask = Mask(4, 20,
+                20)
+        };
         var solution = FieldSolver.Default.Solve(section);
         var c = solution.Line.CapacitanceFaradPerMetre;
 

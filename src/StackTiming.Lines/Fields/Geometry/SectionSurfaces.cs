@@ -176,7 +176,10 @@ internal sealed class SectionSurfaces
     /// <summary>From the end of a piece straight on to infinity.</summary>
     private static SurfacePiece TailFrom(SurfacePiece piece) => piece with
     {
-        Start = piece.End, End = piece.End + piece.End.Real, StartKind = PieceEnd.Smooth, Infinite = true,
+        Start = piece.End,
+        End = piece.End + piece.End.Real,
+        StartKind = PieceEnd.Smooth,
+        Infinite = true,
     };
 
     private void CheckEverySignalShows()
