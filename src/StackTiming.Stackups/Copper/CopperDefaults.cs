@@ -56,12 +56,14 @@ public sealed record CopperDefaults(Quantity? Resistivity, Quantity? Roughness, 
     /// <param name="thickness">Copper thickness, metres.</param>
     public CopperProperties For(Quantity thickness)
     {
-        var undercut = Undercut ?? (EtchFactor is { } factor
-            ? new Quantity(thickness.Value / factor.Value, Scaled(factor.Tolerance, thickness.Value / (factor.Value * factor.Value)))
-            : Quantity.Exact(0));
+        var undercut = Undercut ?? (EtchFactor is { } factor ? UndercutOf(thickness.Value, factor) : Quantity.Exact(0));
         return new CopperProperties(Resistivity ?? Quantity.Exact(AnnealedOhmMetres), Roughness ?? Quantity.Exact(0), undercut);
     }
 
-    // A larger etch factor undercuts less: the bounds change sides.
-    private static Tolerance Scaled(Tolerance tolerance, double slope) => new(tolerance.Plus * slope, tolerance.Minus * slope, tolerance.Spread);
+    // A larger etch factor undercuts less: the bounds change sides, and are those of the quotient itself rather than of its slope.
+    private static Quantity UndercutOf(double thicknessMetres, Quantity factor)
+    {
+        var nominal = thicknessMetres / factor.Value;
+        return new Quantity(nominal, factor.Tolerance with { Minus = nominal - thicknessMetres / factor.Highest, Plus = thicknessMetres / factor.Lowest - nominal });
+    }
 }

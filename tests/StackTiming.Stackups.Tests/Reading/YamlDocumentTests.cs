@@ -111,6 +111,10 @@ public sealed class YamlDocumentTests
     }
 
     [Fact]
+    public void The_number_of_values_is_bounded() =>
+        Assert.EndsWith("error: the file has too many values", Assert.Single(Problems("a: [" + string.Concat(Enumerable.Repeat("x,", YamlDocument.MostNodes)) + "]")));
+
+    [Fact]
     public void Anchors_that_would_grow_in_memory_are_refused_without_growing()
     {
         var bomb = "a: &a [x,x,x,x,x,x,x,x,x]\n" + string.Concat("bcdefghi".Select(c => $"{c}: &{c} [{string.Join(',', Enumerable.Repeat("*" + (char)(c - 1), 9))}]\n"));
