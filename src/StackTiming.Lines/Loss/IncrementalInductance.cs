@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using System.Numerics;
 using StackTiming.Lines.Materials;
 using StackTiming.Lines.Roughness;
@@ -55,7 +54,7 @@ public static class IncrementalInductance
             }
         }
         var c = solution.CapacitanceFaradPerMetre;
-        return new LineAtFrequency(solution.Signals, hertz, r, l, conductance, c, Modes(hertz, rSmooth, r, l, conductance, c), warnings);
+        return new LineAtFrequency(solution.Signals, hertz, r, l, conductance, c, WaveOfLine.Modes(hertz, rSmooth, r, l, conductance, c), warnings);
     }
 
     /// <summary>Direct-current resistance of a trace, ohm/m; 0 for a trace without thickness.</summary>
@@ -124,21 +123,4 @@ public static class IncrementalInductance
             BottomMask = section.BottomMask is { } bottom ? bottom with { Dielectric = Grow(bottom.Dielectric) } : null,
         };
     }
-
-    private static ImmutableArray<WaveAtFrequency> Modes(double hertz, double[,] smooth, double[,] rough, double[,] l, double[,] g, double[,] c) =>
-        l.GetLength(0) switch
-        {
-            1 => [WaveOfLine.Of("single", hertz, smooth[0, 0], rough[0, 0], l[0, 0], g[0, 0], c[0, 0])],
-            // Voltages ±1/2 and currents ±1 for the differential wave; one voltage and half the current in each trace for the common one.
-            2 =>
-            [
-                WaveOfLine.Of("differential", hertz, Series(smooth, -1), Series(rough, -1), Series(l, -1), Shunt(g, -1), Shunt(c, -1)),
-                WaveOfLine.Of("common", hertz, 0.25 * Series(smooth, 1), 0.25 * Series(rough, 1), 0.25 * Series(l, 1), 4 * Shunt(g, 1), 4 * Shunt(c, 1)),
-            ],
-            _ => [],
-        };
-
-    private static double Series(double[,] m, int sign) => m[0, 0] + m[1, 1] + sign * (m[0, 1] + m[1, 0]);
-
-    private static double Shunt(double[,] m, int sign) => 0.25 * Series(m, sign);
 }

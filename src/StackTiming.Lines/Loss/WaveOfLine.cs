@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using System.Numerics;
 
 namespace StackTiming.Lines.Loss;
@@ -30,5 +31,26 @@ internal static class WaveOfLine
         var scale = sum > 0 ? DecibelPerNeper * gamma.Real / sum : 0;
         return new WaveAtFrequency(
             name, z.Real, z.Imaginary, gamma.Imaginary / omega, scale * bySmooth, scale * byRough, scale * byDielectric);
+    }
+
+    /// <summary>The wave of a single signal; the differential and the common wave of a pair; none for more signals.</summary>
+    /// <param name="hertz">Frequency, Hz.</param>
+    /// <param name="smooth">R matrix of smooth metal, ohm/m.</param>
+    /// <param name="rough">R matrix with roughness, ohm/m.</param>
+    /// <param name="l">L matrix, H/m.</param>
+    /// <param name="g">G matrix, S/m.</param>
+    /// <param name="c">C matrix, F/m.</param>
+    public static ImmutableArray<WaveAtFrequency> Modes(double hertz, double[,] smooth, double[,] rough, double[,] l, double[,] g, double[,] c)
+    {
+        var waves = ImmutableArray.CreateBuilder<WaveAtFrequency>();
+        for (var mode = 0; mode < ModeConstants.Count(l.GetLength(0)); mode++)
+        {
+            var of = ModeConstants.Of(mode, rough, l, g, c);
+            var resistance = ModeConstants.Of(mode, smooth, l, g, c).ResistanceOhmPerMetre;
+            waves.Add(Of(
+                ModeConstants.Name(l.GetLength(0), mode), hertz, resistance, of.ResistanceOhmPerMetre,
+                of.InductanceHenryPerMetre, of.ConductanceSiemensPerMetre, of.CapacitanceFaradPerMetre));
+        }
+        return waves.ToImmutable();
     }
 }

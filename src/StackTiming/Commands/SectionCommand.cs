@@ -2,7 +2,7 @@ using System.CommandLine;
 using System.Globalization;
 using System.Text.Json;
 using System.Text.Json.Serialization;
-using StackTiming.Lines.Loss;
+using StackTiming.Lines.Sweeps;
 using StackTiming.Lines.Results;
 using StackTiming.Lines.Sections;
 using StackTiming.Stackups.Quantities;
@@ -25,6 +25,8 @@ internal static class SectionCommand
         var json = new Option<bool>("--json") { Description = "Print JSON instead of a table." };
         var method = MethodOption.Create(MethodOption.Field, withBoth: true);
         var command = new Command("section", "Impedance, matrices, delay, loss and field energy of one cross-section.") { file, method, frequency, lossless, json };
+        var sweeps = new SectionSweepOptions();
+        sweeps.AddTo(command);
         command.SetAction(result =>
         {
             var (output, error) = (result.InvocationConfiguration.Output, result.InvocationConfiguration.Error);
@@ -34,6 +36,18 @@ internal static class SectionCommand
                 hertz = Frequency(result.GetValue(frequency), problems);
             else if (result.GetValue(frequency) is not null)
                 problems.Error(FilePosition.WholeFile("--frequency"), "--lossless takes Dk as stated, so there is no frequency to choose", "leave one of the two away");
+            var request = sweeps.Read(result, problems);
+            if (request is not null && (result.GetValue(lossless) || result.GetValue(frequency) is not null))
+                problems.Error(FilePosition.WholeFile("--sweep"), "a sweep has losses and its own frequencies", "leave --frequency and --lossless away");
+            if (request is not null && result.GetRequiredValue(method) == MethodOption.Both)
+                problems.Error(FilePosition.WholeFile("--sweep"), "a sweep is by one method", "write --method field or --method closed-form");
+            if (problems.HasErrors)
+            {
+                ProblemPrinter.Print(problems, error);
+                return ExitCode.WrongInput;
+            }
+            if (request is not null)
+                return SectionSweepRun.Run(result, request, result.GetRequiredValue(file), result.GetRequiredValue(method), result.GetValue(json), problems);
             var results = Results(result.GetRequiredValue(file), hertz, result.GetRequiredValue(method), problems);
             ProblemPrinter.Print(problems, error);
             if (results is null)
@@ -49,6 +63,8 @@ internal static class SectionCommand
               stacktiming section pair.section.yaml
               stacktiming section pair.section.yaml --method both --frequency 5GHz
               stacktiming section pair.section.yaml --lossless --json
+              stacktiming section pair.section.yaml --sweep 1MHz..20GHz --csv pair.csv
+              stacktiming section pair.section.yaml --sweep 1MHz..20GHz --per-decade 50 --touchstone pair.s4p --length 50mm
             """);
         return command;
     }
@@ -75,7 +91,7 @@ internal static class SectionCommand
         {
             var calculator = MethodOption.Calculator(one);
             if (calculator.Calculate(section) is { } solution)
-                results.Add(SectionResult.Of(solution, hertz is { } f ? IncrementalInductance.At(section, f, calculator) : null));
+                results.Add(SectionResult.Of(solution, hertz is { } f ? LineSweep.Of(_ => section, [f], calculator)?[0] : null));
             else if (method == MethodOption.Both && one == MethodOption.ClosedForm)
                 problems.Note(FilePosition.WholeFile(path), calculator.Objection(section) ?? "no closed form describes this section");
             else
