@@ -56,6 +56,23 @@ public sealed class SectionSweepTests
     }
 
     [Theory]
+    [InlineData("fields.svg", "<svg")]
+    [InlineData("fields.pdf", "%PDF-")]
+    [InlineData("fields.png", "PNG")]
+    [InlineData("loss.svg", "attenuation", "--sweep", "1GHz..10GHz", "--per-decade", "3")]
+    public void Figures_are_of_the_kind_that_their_name_says(string name, string expected, params string[] options)
+    {
+        using var folder = new TemporaryFolder();
+        var file = folder.Write("pair.section.yaml", Pair);
+
+        var run = Tool.Run(["section", file, "--figure", folder.PathOf(name), .. options]);
+
+        Assert.True(run.ExitCode == 0, run.Error);
+        Assert.Contains(expected, File.ReadAllText(folder.PathOf(name)));
+    }
+
+    [Theory]
+    [InlineData("ends in none of .svg", "--figure", "fields.gif")]
     [InlineData("needs a lowest and a highest", "--sweep", "1GHz")]
     [InlineData("must lie below", "--sweep", "2GHz..1GHz")]
     [InlineData("no length", "--sweep", "1GHz..2GHz", "--touchstone", "a.s4p")]

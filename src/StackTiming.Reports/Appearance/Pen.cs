@@ -72,6 +72,24 @@ public class Pen : IDisposable
         paint.PathEffect = null;
     }
 
+    /// <summary>Draws a line through points.</summary>
+    /// <param name="points">The points.</param>
+    /// <param name="color">Colour.</param>
+    /// <param name="thickness">Thickness.</param>
+    /// <param name="dashes">Lengths of dashes and gaps; empty for a solid line.</param>
+    public void Line(SKPoint[] points, SKColor color, float thickness, params float[] dashes)
+    {
+        paint.Color = color;
+        paint.Style = SKPaintStyle.Stroke;
+        paint.StrokeWidth = thickness;
+        using var effect = dashes.Length > 0 ? SKPathEffect.CreateDash(dashes, 0) : null;
+        paint.PathEffect = effect;
+        using var path = new SKPath();
+        path.AddPoly(points, false);
+        Canvas.DrawPath(path, paint);
+        paint.PathEffect = null;
+    }
+
     /// <summary>Fills a rectangle.</summary>
     /// <param name="area">The rectangle.</param>
     /// <param name="color">Colour.</param>

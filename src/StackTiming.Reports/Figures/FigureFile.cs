@@ -37,4 +37,26 @@ public static class FigureFile
         using var canvas = SKSvgCanvas.Create(SKRect.Create(widthPoints, height), output);
         drawing.Draw(canvas, widthPoints, height);
     }
+
+    /// <summary>Writes a PDF file of one page that the drawing fills.</summary>
+    /// <param name="drawing">The drawing.</param>
+    /// <param name="title">Title of the document.</param>
+    /// <param name="widthPoints">Width, points.</param>
+    /// <param name="output">Where to.</param>
+    public static void WritePdf(IDrawing drawing, string title, float widthPoints, Stream output)
+    {
+        const float border = 24;
+        var height = drawing.HeightFor(widthPoints);
+        using var buffer = new MemoryStream();
+        using (var pdf = SKDocument.CreatePdf(buffer, new SKDocumentPdfMetadata { Title = title, EncodingQuality = 100, RasterDpi = 300 }))
+        {
+            var canvas = pdf.BeginPage(widthPoints + 2 * border, height + 2 * border);
+            canvas.Translate(border, border);
+            drawing.Draw(canvas, widthPoints, height);
+            pdf.EndPage();
+            pdf.Close();
+        }
+        buffer.Position = 0;
+        buffer.CopyTo(output);
+    }
 }

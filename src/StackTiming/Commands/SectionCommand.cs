@@ -2,9 +2,11 @@ using System.CommandLine;
 using System.Globalization;
 using System.Text.Json;
 using System.Text.Json.Serialization;
-using StackTiming.Lines.Sweeps;
+using StackTiming.Lines.Fields;
 using StackTiming.Lines.Results;
 using StackTiming.Lines.Sections;
+using StackTiming.Lines.Sweeps;
+using StackTiming.Reports.Figures;
 using StackTiming.Stackups.Quantities;
 using StackTiming.Stackups.Reading;
 using StackTiming.Terminal;
@@ -23,8 +25,9 @@ internal static class SectionCommand
         var frequency = new Option<string?>("--frequency") { Description = "Frequency of Dk, Df and losses (default 1 GHz).", HelpName = "frequency" };
         var lossless = new Option<bool>("--lossless") { Description = "External inductance and Dk as stated, without losses." };
         var json = new Option<bool>("--json") { Description = "Print JSON instead of a table." };
+        var figure = new Option<string?>("--figure") { Description = "Draw the section with its fields, or, with --sweep, attenuation and delay.", HelpName = "file.svg|png|pdf" };
         var method = MethodOption.Create(MethodOption.Field, withBoth: true);
-        var command = new Command("section", "Impedance, matrices, delay, loss and field energy of one cross-section.") { file, method, frequency, lossless, json };
+        var command = new Command("section", "Impedance, matrices, delay, loss and field energy of one cross-section.") { file, method, frequency, lossless, json, figure };
         var sweeps = new SectionSweepOptions();
         sweeps.AddTo(command);
         command.SetAction(result =>
@@ -41,16 +44,18 @@ internal static class SectionCommand
                 problems.Error(FilePosition.WholeFile("--sweep"), "a sweep has losses and its own frequencies", "leave --frequency and --lossless away");
             if (request is not null && result.GetRequiredValue(method) == MethodOption.Both)
                 problems.Error(FilePosition.WholeFile("--sweep"), "a sweep is by one method", "write --method field or --method closed-form");
+            if (result.GetValue(figure) is { } drawn && !FigureOutput.IsKnown(drawn))
+                problems.Error(FilePosition.WholeFile("--figure"), "the figure's kind is told by its name, and this one ends in none of .svg, .png, .pdf", "name it section.svg");
             if (problems.HasErrors)
             {
                 ProblemPrinter.Print(problems, error);
                 return ExitCode.WrongInput;
             }
             if (request is not null)
-                return SectionSweepRun.Run(result, request, result.GetRequiredValue(file), result.GetRequiredValue(method), result.GetValue(json), problems);
+                return SectionSweepRun.Run(result, request, result.GetRequiredValue(file), result.GetRequiredValue(method), result.GetValue(json), result.GetValue(figure), problems);
             var results = Results(result.GetRequiredValue(file), hertz, result.GetRequiredValue(method), problems);
             ProblemPrinter.Print(problems, error);
-            if (results is null)
+            if (results is null || !Draw(result.GetRequiredValue(file), hertz, result.GetValue(figure), error))
                 return ExitCode.WrongInput;
             if (result.GetValue(json))
                 output.WriteLine(results.Count == 1 ? Json(results[0]) : "[\n" + string.Join(",\n", results.Select(Json)) + "\n]");
@@ -63,7 +68,8 @@ internal static class SectionCommand
               stacktiming section pair.section.yaml
               stacktiming section pair.section.yaml --method both --frequency 5GHz
               stacktiming section pair.section.yaml --lossless --json
-              stacktiming section pair.section.yaml --sweep 1MHz..20GHz --csv pair.csv
+              stacktiming section pair.section.yaml --figure fields.svg
+              stacktiming section pair.section.yaml --sweep 1MHz..20GHz --csv pair.csv --figure loss.pdf
               stacktiming section pair.section.yaml --sweep 1MHz..20GHz --per-decade 50 --touchstone pair.s4p --length 50mm
             """);
         return command;
@@ -98,6 +104,26 @@ internal static class SectionCommand
                 problems.Error(FilePosition.WholeFile(path), calculator.Objection(section) ?? $"the {calculator.Name} has no result for this section", "try --method field");
         }
         return problems.HasErrors ? null : results;
+    }
+
+    // Always by the field solver, as closed forms have no fields; the file has been read without problems by now.
+    private static bool Draw(string path, double? hertz, string? figure, TextWriter error)
+    {
+        if (figure is null)
+            return true;
+        var problems = new ProblemList();
+        try
+        {
+            var section = SectionFileReader.Read(InputFileLoader.Load(path, default, problems)!, problems)!.At(hertz, problems)!;
+            var picture = SectionPictures.Of(Path.GetFileName(path), FieldSolver.Default.Solve(section));
+            return Outputs.Write(error, CancellationToken.None, (figure, s => FigureOutput.Write(new SectionFigure(picture), picture.Title, figure, s)));
+        }
+        catch (SectionNotSolvableException e)
+        {
+            problems.Error(FilePosition.WholeFile(path), e.Message.TrimEnd('.'));
+            ProblemPrinter.Print(problems, error);
+            return false;
+        }
     }
 
     private static string Json(SectionResult result) => JsonSerializer.Serialize(result, SectionJson.Default.SectionResult);

@@ -7,6 +7,7 @@ using StackTiming.Lines.Scattering;
 using StackTiming.Lines.Sections;
 using StackTiming.Lines.Solutions;
 using StackTiming.Lines.Sweeps;
+using StackTiming.Reports.Figures;
 using StackTiming.Reports.Results;
 using StackTiming.Stackups.Reading;
 using StackTiming.Terminal;
@@ -117,6 +118,17 @@ internal sealed record SectionSweep(string File, string Method, ImmutableArray<L
                 .. Lines.SelectMany(l => l.Warnings).Distinct(),
             ]);
     }
+
+    /// <summary>The curves of the figure.</summary>
+    public SweepCurves Curves() => new(
+        $"{File}, {Method}, a prediction",
+        [.. Lines.Select(l => l.FrequencyHertz)],
+        [.. Lines[0].Modes.Select((m, mode) => new SweepWave(
+            m.Name,
+            [.. Lines.Select(l => l.Modes[mode].ConductorDecibelPerMetre)],
+            [.. Lines.Select(l => l.Modes[mode].RoughnessDecibelPerMetre)],
+            [.. Lines.Select(l => l.Modes[mode].DielectricDecibelPerMetre)],
+            [.. Lines.Select(l => l.Modes[mode].DelaySecondsPerMetre)]))]);
 
     private static void WriteLine(Utf8JsonWriter writer, LineAtFrequency line)
     {

@@ -1,5 +1,6 @@
 using System.CommandLine;
 using StackTiming.Lines.Sections;
+using StackTiming.Reports.Figures;
 using StackTiming.Reports.Results;
 using StackTiming.Stackups.Reading;
 using StackTiming.Terminal;
@@ -10,7 +11,7 @@ namespace StackTiming.Commands;
 internal static class SectionSweepRun
 {
     /// <summary>Computes, writes and prints.</summary>
-    public static int Run(ParseResult result, SectionSweepRequest request, string path, string method, bool json, ProblemList problems)
+    public static int Run(ParseResult result, SectionSweepRequest request, string path, string method, bool json, string? figure, ProblemList problems)
     {
         var (output, error) = (result.InvocationConfiguration.Output, result.InvocationConfiguration.Error);
         SectionSweep? sweep = null;
@@ -23,6 +24,7 @@ internal static class SectionSweepRun
             return ExitCode.WrongInput;
         var written = Outputs.Write(
             error, CancellationToken.None,
+            (figure, s => FigureOutput.Write(new SweepFigure(sweep.Curves()), sweep.File, figure!, s)),
             (request.CsvPath, sweep.WriteCsv),
             (request.TouchstonePath, s => TouchstoneWriter.Write(
                 sweep.Touchstone(request.LengthMetres, request.ReferenceOhms), HasExtension(request.TouchstonePath!, ".ts"), s)));
