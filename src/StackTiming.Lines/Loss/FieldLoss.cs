@@ -8,7 +8,8 @@ namespace StackTiming.Lines.Loss;
 /// <summary>
 /// Losses of a solved cross-section from its own fields: resistance and internal inductance from direct current to skin effect by <see cref="ConductorLoss"/>, planes
 /// included; conductance from the energy in each dielectric. Roughness adds (K − 1)·Z_s·spread with K of <see cref="HammerstadGroisse1999"/> and the surface
-/// impedance Z_s, which is nothing where the current still fills the copper.
+/// impedance Z_s, which is nothing where the current still fills the copper. Planes count as thick: below about 15 MHz, where the skin depth exceeds a plane of 17 µm, their
+/// resistance is understated and their internal inductance overstated.
 /// </summary>
 public static class FieldLoss
 {

@@ -7,10 +7,10 @@ namespace StackTiming.Reports.Figures;
 /// <summary>Charge on conductors as areas that stand on their faces: positive filled, negative outlined with hairs. Close to corners it is cut.</summary>
 internal static class ChargeHairs
 {
-    /// <summary>Draws the charge; a density of <paramref name="high"/> stands as far as a ninth of the window is high.</summary>
+    /// <summary>Draws the charge; a density of <paramref name="high"/> stands as far as <see cref="Tall"/> says.</summary>
     public static void Draw(Pen pen, SectionView view, IReadOnlyList<ChargedFace> faces, double high)
     {
-        var tall = view.Area.Height / 9;
+        var tall = Tall(view);
         foreach (var face in faces)
         {
             for (var sign = 1; sign >= -1; sign -= 2)
@@ -49,7 +49,7 @@ internal static class ChargeHairs
     public static void DrawKey(Pen pen, SectionView view, double high, bool negative, SKPoint at)
     {
         var style = TextStyle.Small with { Size = 6.6f };
-        var tall = view.Area.Height / 9;
+        var tall = Tall(view);
         var text = (high * 1e9).ToString("0.###", CultureInfo.InvariantCulture) + " nC/m²; ends blunt where more";
         pen.Fill(new SKRect(at.X, at.Y - tall, at.X + 10, at.Y), Palette.Accent);
         pen.Text("positive, this high: " + text, style, at.X + 14, at.Y - 1);
@@ -59,6 +59,9 @@ internal static class ChargeHairs
         pen.Outline(new SKRect(x, at.Y - tall, x + 10, at.Y), Palette.Alarm, 0.7f);
         pen.Text("negative", style, x + 14, at.Y - 1);
     }
+
+    /// <summary>How far the round density stands: a ninth of the window, at most what the key has room for.</summary>
+    public static float Tall(SectionView view) => Math.Min(17, view.Area.Height / 9);
 
     private static void DrawSign(Pen pen, SectionView view, ChargedFace face, int sign, double high, float tall)
     {

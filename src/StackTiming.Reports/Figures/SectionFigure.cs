@@ -98,7 +98,7 @@ public sealed class SectionFigure(SectionPicture picture) : IDrawing
         });
         pen.Outline(view.Area, Palette.Rule, 0.5f);
         var negative = picture.Charges.Any(f => Array.Exists(f.CoulombPerSquareMetre, c => c < -0.02 * high));
-        ChargeHairs.DrawKey(pen, view, high, negative, new SKPoint(view.Area.Left, view.Area.Bottom + 5 + view.Area.Height / 9));
+        ChargeHairs.DrawKey(pen, view, high, negative, new SKPoint(view.Area.Left, view.Area.Bottom + 4 + ChargeHairs.Tall(view)));
     }
 
     // A pour reaches far beyond the window, where it has almost no charge.

@@ -52,10 +52,15 @@ public sealed class SweepFigure(SweepCurves curves) : IDrawing
     private void DrawAttenuation(Pen pen, SweepWave wave, SKRect plot, string heading, float top)
     {
         var total = wave.Conductor.Select((c, k) => c + wave.Roughness[k] + wave.Dielectric[k]).ToArray();
-        var high = Math.Ceiling(Math.Log10(Math.Max(1e-9, total.Max())));
+        pen.Text(heading, TextStyle.Label, plot.Left - 28, top + 10);
+        if (total.Max() <= 0)
+        {
+            pen.Text("none: the section states neither copper nor dielectrics with loss", TextStyle.Small, plot.Left - 28, top + 24);
+            return;
+        }
+        var high = Math.Ceiling(Math.Log10(total.Max()));
         var least = Math.Max(1e-12, total.Min());
         var low = Math.Max(high - Decades, Math.Floor(Math.Log10(least)) - 1);
-        pen.Text(heading, TextStyle.Label, plot.Left - 28, top + 10);
         DrawFrequencyAxis(pen, plot);
         var style = TextStyle.Small with { Size = 6.6f };
         for (var decade = low; decade <= high; decade++)

@@ -48,7 +48,7 @@ internal static class SectionPictures
         var side = 2.5 * distance;
         (left, right) = (left - side, right + side);
         var slabs = section.Slabs;
-        var bottom = section.BottomPlaneMetres ?? Math.Max(slabs.IsEmpty ? low : Math.Min(low, slabs[0].BottomMetres), low - 3 * side) - 1.2 * distance;
+        var bottom = section.BottomPlaneMetres ?? Math.Max(slabs.IsEmpty ? low : Math.Min(low, slabs[0].BottomMetres), low - distance) - 1.2 * distance;
         var top = section.TopPlaneMetres ?? high + 1.6 * distance;
         // A window much flatter than it is wide has no room for lines; one much taller leaves none on the page.
         var metal = 0.04 * (top - bottom);
@@ -128,7 +128,8 @@ internal static class SectionPictures
             var length = Math.Sqrt(dx * dx + dy * dy);
             var (nx, ny) = (dy / length, -dx / length);
             var (ox, oy) = (charge.XMetres[0] - of.CentreMetres, charge.YMetres[0] - (of.BottomMetres + of.TopMetres) / 2);
-            var outward = nx * ox + ny * oy >= 0 ? 1 : -1;
+            // A strip without thickness has one face for both of its sides: its charge stands upwards.
+            var outward = of.ThicknessMetres == 0 ? Math.Sign(ny) : nx * ox + ny * oy >= 0 ? 1 : -1;
             faces.Add(new ChargedFace(charge.XMetres, charge.YMetres, outward * nx, outward * ny, charge.TotalCoulombPerSquareMetre));
         }
         return faces.ToImmutable();
