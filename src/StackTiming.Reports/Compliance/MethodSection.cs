@@ -22,7 +22,7 @@ internal static class MethodSection
                 return Row.Of(
                     RichText.Of(new Run(description?.Name ?? m.Id, Emphasis.Strong)), description?.Source ?? "", description?.Validity ?? "",
                     description is { MeasuredError.Length: > 0 } ? description.MeasuredError : "–",
-                    m.WorstRelativeError > 0 ? Wording.Percent(m.WorstRelativeError, 1) : "exact", m.UsedFor);
+                    m.WorstRelativeError > 0 ? Wording.Percent(m.WorstRelativeError, 2) : "exact", m.UsedFor);
             })],
             "Measured error: the largest error against independent reference cases, recomputed by the tests of the program.");
         var further = new Table(

@@ -129,7 +129,7 @@ internal static class StackUpSection
             RichText.In(line.Layer, Emphasis.Strong), Wording.Millimetres(line.WidthMetres), line.GapMetres is { } gap ? Wording.Millimetres(gap) : "", F(line.Z0Ohms, "0.00"), F(line.ZDiffOhms, "0.00"),
             F(line.EpsEff, "0.000"), F(line.DelaySecondsPerMetre * 1e9, "0.000"),
             string.Join(", ", line.Shares.OrderByDescending(s => s.Share).Take(3).Select(s => $"{s.Dielectric} {Wording.Percent(s.Share, 0)}")),
-            line.MethodId, Wording.Percent(line.RelativeError, 1), F(line.TotalLengthMetres * 1e3, "0"));
+            line.MethodId, Wording.Percent(line.RelativeError, 2), F(line.TotalLengthMetres * 1e3, "0"));
     }
 
     private static Row CrossCheckRow(LineUse line)
