@@ -29,6 +29,7 @@ internal static class StackUpSection
         [
             new Section("layers", "Layers with their tolerances", [Layers(result.StackUp)], []),
             new Section("lines", "Lines", Lines(result), []),
+            .. FieldsSection.Build(result),
         ])
         { BeginsPage = true };
     }

@@ -5,30 +5,31 @@ using StackTiming.Lines.Fields;
 using StackTiming.Lines.Fields.Currents;
 using StackTiming.Lines.Sections;
 using StackTiming.Lines.Solutions;
-using StackTiming.Reports.Figures;
 
-namespace StackTiming.Commands;
+namespace StackTiming.Reports.Figures;
 
 /// <summary>The picture of a solved section under its usual drive: 1 V on a single signal, ±1/2 V on a pair, 1 V on the first of more.</summary>
-internal static class SectionPictures
+public static class SectionPictures
 {
-    private const int Columns = 300;
+    /// <summary>Columns of the maps in a picture that has a page or a screen to itself.</summary>
+    public const int FineColumns = 300;
 
     /// <summary>The picture.</summary>
-    /// <param name="file">Name of the section file.</param>
+    /// <param name="name">What the section is called.</param>
     /// <param name="solution">The solved section.</param>
-    public static SectionPicture Of(string file, FieldSolution solution)
+    /// <param name="columns">Columns of the maps; the time that they take grows with the square.</param>
+    public static SectionPicture Of(string name, FieldSolution solution, int columns = FineColumns)
     {
         var section = solution.Section;
         var names = solution.Line.Signals;
         double[] volts = names.Length == 2 ? [0.5, -0.5] : [1, .. Enumerable.Repeat(0.0, names.Length - 1)];
         double[] amperes = names.Length == 2 ? [1, -1] : [1, .. Enumerable.Repeat(0.0, names.Length - 1)];
         var window = Window(section);
-        var rows = Math.Clamp((int)Math.Round(Columns * (window.Top - window.Bottom) / (window.Right - window.Left)), 40, 400);
-        var map = FieldMap.Of(solution, volts, window, Columns, rows);
+        var rows = Math.Clamp((int)Math.Round(columns * (window.Top - window.Bottom) / (window.Right - window.Left)), 40, 400);
+        var map = FieldMap.Of(solution, volts, window, columns, rows);
         FieldGrid Grid(double[] values) => new(map.Columns, map.Rows, values);
         return new SectionPicture(
-            $"{file}: {Impedance(solution.Line)}",
+            $"{name}: {Impedance(solution.Line)}",
             "Drive " + string.Join(", ", names.Select((n, i) => $"{n} {Volts(volts[i])}")) + "; planes and grounded conductors 0 V; forward wave; field solver, a prediction",
             Outline(section, window, volts),
             Grid(map.PotentialVolts), Grid(map.EnergyJoulePerCubicMetre), Grid(map.PowerWattPerSquareMetre),
