@@ -17,6 +17,9 @@ internal static class RulesSection
     private const int LeastRowsOfARule = 4;
     private const int MostRowsOfARule = 40;
 
+    // Of what holds, a reviewer needs the tightest; the rest is in the attached results.
+    private const int PassesOfARule = 5;
+
     /// <summary>The section.</summary>
     /// <param name="result">The results of the check.</param>
     /// <param name="judgements">The findings by rule.</param>
@@ -28,7 +31,7 @@ internal static class RulesSection
         var listed = result.Rules.Take(RulesListed).ToList();
         var summary = new Table(
             [
-                new Column("Rule"), new Column("Kind"), new Column("Nets", Grows: true), new Column("Limit"), new Column("Severity"), new Column("Pass", Alignment.Right),
+                new Column("Rule") { Wraps = false }, new Column("Kind"), new Column("Nets", Grows: true), new Column("Limit"), new Column("Severity"), new Column("Pass", Alignment.Right),
                 new Column("Fail", Alignment.Right), new Column("Waived", Alignment.Right), new Column("Unch.", Alignment.Right), new Column("Worst margin", Alignment.Right),
             ],
             [.. listed.Select(r => SummaryRow(r, judgements))],
@@ -51,10 +54,13 @@ internal static class RulesSection
         }
         var worst = findings.Where(f => f.Margin is not null).MinBy(f => f.RelativeMargin);
         return Row.Of(
-            RichText.LinkTo(rule.Id, judgements.AnchorOf(rule.Id)), rule.Kind, rule.Nets, Wording.Signs(rule.Limit), rule.Severity == Severity.Must ? "must" : "should",
+            RichText.LinkTo(rule.Id, judgements.AnchorOf(rule.Id)), rule.Kind, Short(rule.Nets), Wording.Signs(rule.Limit), rule.Severity == Severity.Must ? "must" : "should",
             Count(FindingStatus.Pass), findings.Exists(f => f.Status == FindingStatus.Fail) ? RichText.In(Count(FindingStatus.Fail), Emphasis.Strong) : "–",
             Count(FindingStatus.Waived), Count(FindingStatus.Unchecked), worst is null ? "–" : Wording.Figure(worst.Margin, worst.Unit));
     }
+
+    // The table of the rule names them all.
+    private static string Short(string nets) => nets.Length <= 32 ? nets : nets[..31] + "…";
 
     private static Section RuleSection(RuleSummary rule, Judgements judgements, int rows)
     {
@@ -63,9 +69,7 @@ internal static class RulesSection
         facts.Add(("Limit", $"{Wording.Signs(rule.Limit)} on {rule.Nets} ({(rule.Severity == Severity.Must ? "must" : "should")})"));
         if (rule.Reason.Length > 0)
             facts.Add(("Reason", rule.Reason));
-        if (rule.Source.Length > 0)
-            facts.Add(("Source", rule.Source));
-        facts.Add(("Written at", RichText.In(rule.At.ToString(), Emphasis.Quiet)));
+        facts.Add(("Source", RichText.Of(new Run(rule.Source.Length > 0 ? rule.Source + "  " : ""), new Run("written at " + rule.At, Emphasis.Quiet))));
 
         var blocks = ImmutableArray.CreateBuilder<Block>();
         blocks.Add(new KeyValues(facts.ToImmutable()));
@@ -73,7 +77,11 @@ internal static class RulesSection
         return new Section(judgements.AnchorOf(rule.Id), $"{rule.Id}: {rule.Kind}", blocks.ToImmutable(), []);
     }
 
-    private static Table FindingTable(List<Finding> findings, int rows) => new(
+    private static Table FindingTable(List<Finding> findings, int most)
+    {
+        // Passes stand behind everything else.
+        var rows = Math.Min(most, findings.Count(f => f.Status != FindingStatus.Pass) + PassesOfARule);
+        return new Table(
         [
             new Column("Status"), new Column("Subject", Grows: true), new Column("Value", Alignment.Right), new Column("Limit", Alignment.Right),
             new Column("Margin", Alignment.Right), new Column("Share of limit"),
@@ -82,4 +90,5 @@ internal static class RulesSection
             new StatusCell(f.Status), f.UncheckedReason.Length > 0 ? RichText.Of(new Run(f.Subject), new Run("  " + f.UncheckedReason, Emphasis.Quiet)) : f.Subject,
             Wording.Figure(f.Value, f.Unit), Wording.Limit(f), Wording.Figure(f.Margin, f.Unit), new MarginCell(f.RelativeMargin)))],
         findings.Count > rows ? $"… and {Wording.Count(findings.Count - rows, "more finding", "more findings")} with larger margins, see the attached results" : "");
+    }
 }

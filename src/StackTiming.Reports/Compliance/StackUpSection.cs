@@ -98,7 +98,7 @@ internal static class StackUpSection
             [
                 new Column("Layer"), new Column("Width, mm", Alignment.Right), new Column("Gap, mm", Alignment.Right), new Column("Z0, Ω", Alignment.Right),
                 new Column("Zdiff, Ω", Alignment.Right), new Column("ε eff", Alignment.Right), new Column("Delay, ps/mm", Alignment.Right),
-                new Column("Field energy in", Grows: true), new Column("Method"), new Column("Error", Alignment.Right), new Column("Routed, mm", Alignment.Right),
+                new Column("Field energy in", Grows: true), new Column("Method") { Wraps = false }, new Column("Error", Alignment.Right), new Column("Routed, mm", Alignment.Right),
             ],
             [.. result.Lines.Take(LinesShown).Select(LineRow)],
             result.Lines.Length > LinesShown ? $"… and {result.Lines.Length - LinesShown} more, see the attached results" : "Z0 of a pair is that of one trace with the other quiet; ε eff and delay of a pair are those of its odd mode."));

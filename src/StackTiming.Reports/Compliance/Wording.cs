@@ -39,7 +39,8 @@ internal static class Wording
     public static string Signs(string text)
     {
         var shown = text.Replace(" ohm", " Ω", StringComparison.Ordinal);
-        return shown.Replace(" -", " −", StringComparison.Ordinal);
+        shown = shown.Replace(" -", " −", StringComparison.Ordinal);
+        return shown.Length > 1 && shown[0] == '-' && char.IsAsciiDigit(shown[1]) ? "−" + shown[1..] : shown;
     }
 
     /// <summary>A length in millimetres.</summary>

@@ -45,7 +45,7 @@ public sealed class WaveformFigure(ReceiverWave wave) : IDrawing
         plot.Axes.SetLimits(0, last > 0 ? last : 1, low, high);
         Style(plot, font, unit);
         plot.Layout.Fixed(new PixelPadding(34, 52, 28, 15));
-        plot.Render(canvas, (int)width, (int)height);
+        PlotPage.Render(plot, canvas, (int)width, (int)height);
 
         using var pen = new Pen(canvas);
         DrawKey(pen, width - 52);
@@ -139,8 +139,7 @@ public sealed class WaveformFigure(ReceiverWave wave) : IDrawing
     {
         for (var i = 0; i < wave.Marks.Length; i++)
         {
-            var mark = wave.Marks[i];
-            if (!double.IsFinite(mark.TimeSeconds) || !double.IsFinite(mark.Volts))
+            if (Place(wave.Marks[i]) is not { } mark)
                 continue;
             var marker = plot.Add.Marker(mark.TimeSeconds * scale, mark.Volts, MarkerShape.OpenCircle, 5, ToPlot(Palette.Alarm));
             marker.MarkerLineWidth = 1.1f;
@@ -153,6 +152,40 @@ public sealed class WaveformFigure(ReceiverWave wave) : IDrawing
             text.OffsetX = -2;
             text.OffsetY = -1;
         }
+    }
+
+    // An instant without a level lies on the curve at its time, a level without an instant at the turning point that reaches it; a level
+    // that the curve only passes is named in the caption alone.
+    private WaveMark? Place(WaveMark mark)
+    {
+        var count = Math.Min(wave.TimeSeconds.Length, wave.Volts.Length);
+        if (count < 3)
+            return null;
+        if (double.IsFinite(mark.TimeSeconds))
+            return double.IsFinite(mark.Volts) ? mark : mark with { Volts = VoltsAt(mark.TimeSeconds, count) };
+        if (!double.IsFinite(mark.Volts))
+            return null;
+        var nearest = 0.01 * (wave.Volts.Max() - wave.Volts.Min());
+        WaveMark? placed = null;
+        for (var i = 1; i < count - 1; i++)
+        {
+            var turns = (wave.Volts[i] - wave.Volts[i - 1]) * (wave.Volts[i + 1] - wave.Volts[i]) <= 0 && wave.Volts[i] != wave.Volts[i - 1];
+            if (turns && Math.Abs(wave.Volts[i] - mark.Volts) < nearest)
+            {
+                nearest = Math.Abs(wave.Volts[i] - mark.Volts);
+                placed = mark with { TimeSeconds = wave.TimeSeconds[i] };
+            }
+        }
+        return placed;
+    }
+
+    private double VoltsAt(double seconds, int count)
+    {
+        var after = Array.BinarySearch(wave.TimeSeconds, 0, count, seconds);
+        after = Math.Clamp(after < 0 ? ~after : after, 1, count - 1);
+        var (from, to) = (wave.TimeSeconds[after - 1], wave.TimeSeconds[after]);
+        var share = to > from ? Math.Clamp((seconds - from) / (to - from), 0, 1) : 0;
+        return wave.Volts[after - 1] + share * (wave.Volts[after] - wave.Volts[after - 1]);
     }
 
     private (double Scale, string Unit) TimeUnit() => EndSeconds() < 2e-9 ? (1e12, "ps") : (1e9, "ns");

@@ -61,6 +61,19 @@ public class FigureTests
     }
 
     [Fact]
+    public void Waveform_places_a_level_at_the_turning_point_that_reaches_it()
+    {
+        var wave = SampleCheck.Wave("CLK", 1);
+        // Marks alone are written in the alarm colour.
+        string[] Numbers(params WaveMark[] marks) => [.. XDocument.Parse(Svg(new WaveformFigure(wave with { Marks = [.. marks] }))).Descendants()
+            .Where(e => e.Name.LocalName == "text" && string.Equals((string?)e.Attribute("fill"), "#A62B1F", StringComparison.OrdinalIgnoreCase)).Select(e => e.Value.Trim())];
+        var highest = new WaveMark("overshoot", double.NaN, wave.Volts.Max());
+        var passed = new WaveMark("first wave", double.NaN, wave.Volts.Max() / 2);
+        var settled = new WaveMark("settled", 4.1e-9, double.NaN);
+        Assert.Equal(["1", "3"], Numbers(highest, passed, settled));
+    }
+
+    [Fact]
     public void Waveform_without_points_or_with_gaps_is_drawn_all_the_same()
     {
         var wave = SampleCheck.Wave("CLK", 1) with { Marks = [], VihVolts = null, VilVolts = null, ThresholdVolts = null };
