@@ -70,6 +70,9 @@ public sealed class BoardReader
         var built = RuleBuilder.Build(rules.Entries, rules.Scopes, resolver, layers, problems);
         if (problems.HasErrors || name is null || stackUp is null || lengths is null || parts is null || electrical is null || index is null)
             return null;
+        DriverCheck.Run(built, electrical, problems);
+        if (problems.HasErrors)
+            return null;
         return new Board
         {
             Name = name,

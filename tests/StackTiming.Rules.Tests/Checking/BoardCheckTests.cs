@@ -147,9 +147,9 @@ public sealed class BoardCheckTests : IDisposable
                   U1: { pins: { 1: { model: io } } }
                   U2: { pins: { 1: { model: io } } }
                 """);
-        var open = Only("rules: [ { id: T, kind: stub, nets: D0, max: 5 ps } ]");
-        Assert.Equal(FindingStatus.Unchecked, open.Status);
-        Assert.Contains("several pins can drive 'D0': U1.1, U2.1", open.UncheckedReason, StringComparison.Ordinal);
+        folder.WriteBoard("rules: [ { id: T, kind: stub, nets: D0, max: 5 ps } ]");
+        Assert.Null(folder.Read());
+        Assert.Contains(folder.Errors(), e => e.Contains("several pins can drive 'D0' (U1.1, U2.1)", StringComparison.Ordinal));
         Assert.Equal("D0", Only("rules: [ { id: T, kind: stub, nets: D0, drive: U2, max: 5 ps } ]").Subject);
         Assert.Equal(
             ["D0 from U1.1", "D0 from U2.1"], Run("rules: [ { id: T, kind: stub, nets: D0, drive: both, max: 5 ps } ]").Findings.Select(f => f.Subject));
