@@ -22,7 +22,7 @@ public static class ComplianceReport
         var sections = ImmutableArray.CreateBuilder<Section>();
         sections.Add(new Section(Anchors.Contents, "Contents", [new Contents(2)], []) { Numbering = Numbering.None, BeginsPage = true });
         sections.Add(FindingsSection.Build(result, judgements));
-        sections.Add(StackUpSection.Build(result));
+        sections.Add(StackUpSection.Build(result, input.ShowFields));
         if (!result.Groups.IsEmpty)
             sections.Add(MatchingSection.Build(result, judgements));
         if (!result.Waves.IsEmpty)

@@ -16,6 +16,9 @@ public sealed record ReportInput(CheckResult Result, ToolIdentity Tool, DateOnly
     /// <summary>The results as JSON, attached to the report; null where nothing is attached.</summary>
     public ReadOnlyMemory<byte>? ResultsJson { get; init; }
 
+    /// <summary>Whether the fields of the most routed lines are drawn. They take most of the time of a small report.</summary>
+    public bool ShowFields { get; init; }
+
     /// <summary>Whether the elapsed times are shown. They differ from run to run, and so would the bytes of the report.</summary>
     public bool ShowTimings { get; init; }
 }

@@ -16,7 +16,8 @@ internal static class StackUpSection
 
     /// <summary>The section.</summary>
     /// <param name="result">The results of the check.</param>
-    public static Section Build(CheckResult result)
+    /// <param name="showFields">Whether the fields of the most routed lines are drawn.</param>
+    public static Section Build(CheckResult result, bool showFields)
     {
         var drawing = new StackUpDrawing(result.StackUp, Labels(result));
         var name = result.StackUp.Name.Length > 0 ? result.StackUp.Name : "Stack-up";
@@ -29,7 +30,7 @@ internal static class StackUpSection
         [
             new Section("layers", "Layers with their tolerances", [Layers(result.StackUp)], []),
             new Section("lines", "Lines", Lines(result), []),
-            .. FieldsSection.Build(result),
+            .. showFields ? FieldsSection.Build(result) : [],
         ])
         { BeginsPage = true };
     }
